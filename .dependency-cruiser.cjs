@@ -1,0 +1,85 @@
+/** Arrows point one way: web -> shared <- server. See DEVELOPERS.md, "Which way the arrows point". */
+module.exports = {
+  forbidden: [
+    { name: "no-circles", severity: "error", from: {}, to: { circular: true } },
+    {
+      name: "shared-is-pure",
+      comment: "shared imports nothing of web, server or fakes, and no Node module",
+      severity: "error",
+      from: { path: "^shared/" },
+      to: { path: "^(web|server|fake-services|tests)/" },
+    },
+    {
+      name: "shared-has-no-input-output",
+      severity: "error",
+      from: { path: "^shared/" },
+      to: { dependencyTypes: ["core"] },
+    },
+    {
+      name: "shared-uses-zod-only",
+      comment: "the one package that shared may import is zod",
+      severity: "error",
+      from: { path: "^shared/" },
+      to: { path: "node_modules", pathNot: "node_modules/zod/" },
+    },
+    { name: "web-not-server", severity: "error", from: { path: "^web/" }, to: { path: "^(server|fake-services|tests)/" } },
+    { name: "server-not-web", severity: "error", from: { path: "^server/" }, to: { path: "^(web|fake-services|tests)/" } },
+    { name: "fakes-alone", severity: "error", from: { path: "^fake-services/" }, to: { path: "^(web|server|tests)/" } },
+    {
+      name: "features-apart",
+      comment: "a feature never imports another feature; routes compose them",
+      severity: "error",
+      from: { path: "^web/features/([^/]+)/" },
+      to: { path: "^web/features/", pathNot: "^web/features/$1/" },
+    },
+    {
+      name: "components-know-no-blocks",
+      severity: "error",
+      from: { path: "^web/components/" },
+      to: { path: "^(web/(features|routes|layouts)|shared/)" },
+    },
+    {
+      name: "routes-are-thin",
+      comment: "a route never touches models, the database or a gateway by itself",
+      severity: "error",
+      from: { path: "^server/routes/" },
+      to: { path: "^server/(models|database|gateways)/" },
+    },
+    {
+      name: "services-below-routes",
+      severity: "error",
+      from: { path: "^server/(services|models|gateways|policies|presenters|emails)/" },
+      to: { path: "^server/routes/" },
+    },
+    {
+      name: "sdk-in-gateways",
+      comment: "only gateways import an SDK that talks to the outside",
+      severity: "error",
+      from: { path: "^server/", pathNot: "^server/gateways/" },
+      to: { path: "node_modules/(stripe|nodemailer)/" },
+    },
+    {
+      name: "catalogue-imports-no-engine",
+      severity: "error",
+      from: { path: "^shared/catalogue/" },
+      to: { path: "^shared/(rules|pricing|scheduling|target|geometry)/" },
+    },
+    {
+      name: "pricing-imports-catalogue-only",
+      severity: "error",
+      from: { path: "^shared/pricing/" },
+      to: { path: "^shared/(rules|scheduling|target|geometry)/" },
+    },
+    { name: "no-orphans-unresolved", severity: "error", from: {}, to: { couldNotResolve: true } },
+  ],
+  options: {
+    doNotFollow: { path: "node_modules" },
+    tsPreCompilationDeps: true,
+    tsConfig: { fileName: "tsconfig.json" },
+    enhancedResolveOptions: {
+      exportsFields: ["exports"],
+      conditionNames: ["import", "require", "node", "default", "types"],
+      extensions: [".ts", ".tsx", ".mjs", ".js"],
+    },
+  },
+};
