@@ -1,0 +1,56 @@
+import { z } from "zod";
+
+/** Twelve characters that can be cut into iron: capitals, digits, blank, dot and hyphen. */
+export const engravingSchema = z
+  .string()
+  .trim()
+  .max(12, "At most 12 characters.")
+  .regex(/^[A-Z0-9 .-]*$/, "Capitals, digits, blank, dot and hyphen only.");
+
+/** A build as it travels: the spec code and what stands beside it. */
+export const buildRequestSchema = z.object({
+  specCode: z.string().min(4).max(120),
+  numbers: z.record(z.string().max(40), z.string().max(20)).default({}),
+});
+export type BuildRequest = z.infer<typeof buildRequestSchema>;
+
+export const priceLineSchema = z.object({
+  kind: z.enum(["base", "option"]),
+  label: z.string(),
+  amountCents: z.int(),
+});
+
+export const findingViewSchema = z.object({
+  rule: z.string(),
+  severity: z.enum(["stop", "caution", "note"]),
+  sentence: z.string(),
+  undecided: z.boolean(),
+});
+export type FindingView = z.infer<typeof findingViewSchema>;
+
+export const figureViewSchema = z.object({
+  id: z.string(),
+  name: z.string(),
+  unit: z.string(),
+  value: z.number().nullable(),
+  places: z.int(),
+});
+
+/** What the server says of a build: POST /api/builds, and within carts and orders. */
+export const buildViewSchema = z.object({
+  specCode: z.string(),
+  catalogueVersion: z.int(),
+  priceListVersion: z.int(),
+  family: z.string(),
+  /** "Marl, 4.1250 in bore, 9.0250 in deck", for lists and mails. */
+  summary: z.string(),
+  answers: z.array(z.object({ step: z.string(), choice: z.string(), option: z.string() })),
+  numbers: z.record(z.string(), z.string()),
+  figures: z.array(figureViewSchema),
+  findings: z.array(findingViewSchema),
+  priceLines: z.array(priceLineSchema),
+  priceCents: z.int(),
+  weight: z.number(),
+  shipsOn: z.iso.date(),
+});
+export type BuildView = z.infer<typeof buildViewSchema>;

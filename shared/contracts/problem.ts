@@ -1,0 +1,30 @@
+import { z } from "zod";
+
+/** RFC 9457 problem details; `errors` points at each field that has to be mended. */
+export const problemSchema = z.object({
+  type: z.string(),
+  title: z.string(),
+  status: z.int(),
+  detail: z.string().optional(),
+  instance: z.string().optional(),
+  errors: z.array(z.object({ path: z.string(), message: z.string() })).optional(),
+});
+export type Problem = z.infer<typeof problemSchema>;
+
+/** The last word of a problem's `type`, by which the client tells problems apart. */
+export const problemKinds = [
+  "validation",
+  "not-signed-in",
+  "not-allowed",
+  "not-found",
+  "csrf",
+  "too-many-requests",
+  "conflict",
+  "price-changed",
+  "build-refused",
+  "payment-closed",
+  "gateway-unavailable",
+  "too-large",
+  "internal",
+] as const;
+export type ProblemKind = (typeof problemKinds)[number];
