@@ -51,6 +51,8 @@ export const buildViewSchema = z.object({
   priceLines: z.array(priceLineSchema),
   priceCents: z.int(),
   weight: z.number(),
+  /** Minutes of one block at each work centre. */
+  minutes: z.record(z.string(), z.int()),
   shipsOn: z.iso.date(),
 });
 export type BuildView = z.infer<typeof buildViewSchema>;
