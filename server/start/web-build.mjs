@@ -1,0 +1,51 @@
+import { readFile, writeFile } from "node:fs/promises";
+import { join } from "node:path";
+import { hashOfFiles } from "./file-hash.mjs";
+import { runCommand, say, StartFailure } from "./failure.mjs";
+import { runProgram } from "./command.mjs";
+import { withLock } from "./lock.mjs";
+import { checkout } from "./locations.mjs";
+
+const inputs = [
+  "web",
+  "shared",
+  "index.html",
+  "vite.config.ts",
+  "tailwind.config.ts",
+  "tsconfig.json",
+  "package-lock.json",
+];
+const mark = join(checkout, "dist", ".inputs-hash");
+
+async function builtHash() {
+  return readFile(mark, "utf8").catch((error) => {
+    if (error.code === "ENOENT" || error.code === "ENOTDIR") return undefined;
+    throw error;
+  });
+}
+
+/** Builds the client into dist/ when anything that it is made of changed since the last build. */
+export async function ensureWebBuild() {
+  await withLock(`web build ${checkout}`, async () => {
+    const hash = await hashOfFiles(checkout, inputs);
+    if ((await builtHash()) === hash) return;
+    say("Building the client ...");
+    const program = join(checkout, "node_modules", "vite", "bin", "vite.js");
+    const env = { ...process.env, NODE_ENV: "production" };
+    const { code, stdout, stderr } = await runProgram(process.execPath, [program, "build"], {
+      cwd: checkout,
+      env,
+    });
+    if (code !== 0) {
+      const report = join(checkout, ".data", "web-build.log");
+      await writeFile(report, `${stdout}\n${stderr}`);
+      const line = stderr.split("\n").find((text) => /error/i.test(text)) ?? "Vite gave no reason";
+      throw new StartFailure(
+        `The client could not be built: ${line.trim()} (the whole report is in ${report})`,
+      );
+    }
+    await writeFile(mark, hash);
+  });
+}
+
+if (process.argv[1] === import.meta.filename) await runCommand(ensureWebBuild);
