@@ -119,13 +119,12 @@ export function expireSession(work: Work, session: Session): void {
   recordEvent(work, "checkout.session.expired", shown(work, session));
 }
 
-/** Closes every session whose time is up. Answers whether there was one. */
-export function expireDueSessions(work: Work): boolean {
+/** Closes every session whose time is up. */
+export function expireDueSessions(work: Work): void {
   const due = Object.values(work.state.sessions).filter(
     (session) => session.status === "open" && session.expires_at <= work.now,
   );
   for (const session of due) expireSession(work, session);
-  return due.length > 0;
 }
 
 /** A session as the API shows it: an open one has the address where it is paid. */
