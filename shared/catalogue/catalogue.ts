@@ -205,5 +205,7 @@ export const catalogueSchema = z.object({
   numbers: z.array(numberFieldSchema),
   rules: z.array(ruleSchema),
   outlines: z.array(outlineSchema).default([]),
+  /** Mean effective pressures behind the power range; a pair that is not listed has no range. */
+  bmepRanges: z.array(bmepRangeSchema).default([]),
 });
 export type Catalogue = z.infer<typeof catalogueSchema>;

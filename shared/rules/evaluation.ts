@@ -49,13 +49,14 @@ export interface Reason {
 
 /** A smallest set of changed answers that makes a closed option open. */
 export interface Mend {
-  changes: { choice: string; from: string; to: string }[];
+  /** `to` is null where the answer is dropped, because the new family does not have that option. */
+  changes: { choice: string; from: string; to: string | null }[];
   /** Net effect of the wanted option and the changes together, cents. */
   priceCents: number | null;
   days: number | null;
 }
 
-export type FigureUnit = "in" | "cu in" | "cc" | "L" | "m/s" | "ft/min" | "lb" | "ratio" | "degrees";
+export type FigureUnit = "in" | "cu in" | "cc" | "L" | "m/s" | "ft/min" | "hp" | "lb" | "ratio" | "degrees";
 
 export interface Figure {
   id: string;
