@@ -62,11 +62,14 @@ export const tokens = {
 type Theme = Record<keyof typeof tokens.light, string>;
 
 function customProperties(theme: Theme, scheme: "light" | "dark"): Record<string, string> {
-  const named = Object.entries(theme).map(([name, value]) => [`--${name}`, value]);
-  return { "color-scheme": scheme, ...Object.fromEntries(named) };
+  const properties: Record<string, string> = { "color-scheme": scheme };
+  for (const [name, value] of Object.entries(theme)) properties[`--${name}`] = value;
+  return properties;
 }
 
-const colours = Object.fromEntries(Object.keys(tokens.light).map((name) => [name, `var(--${name})`]));
+const colours: Record<string, string> = Object.fromEntries(
+  Object.keys(tokens.light).map((name) => [name, `var(--${name})`]),
+);
 
 export default {
   content: ["./index.html", "./web/**/*.{ts,tsx}"],
@@ -95,8 +98,8 @@ export default {
     },
   },
   plugins: [
-    plugin(({ addBase }) => {
-      addBase({
+    plugin((api) => {
+      api.addBase({
         ":root": customProperties(tokens.light, "light"),
         "@media (prefers-color-scheme: dark)": { ":root": customProperties(tokens.dark, "dark") },
         ':root[data-theme="light"]': customProperties(tokens.light, "light"),

@@ -6,7 +6,7 @@ interface SkeletonProps {
 }
 
 /** Keeps the place of what is loading, at the same size. */
-export function Skeleton({ lines = 3, label = "Loading" }: SkeletonProps) {
+export function Skeleton({ lines = 6, label = "Loading" }: SkeletonProps) {
   return (
     <div role="status" className="animate-pulse">
       <span className="sr-only">{label}</span>

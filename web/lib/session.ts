@@ -39,13 +39,14 @@ export function useStartAnew(): () => Promise<void> {
   };
 }
 
-/** Which roles may enter which place; the server decides for every record, this only spares a walk to a closed door. */
-export const placeRoles = {
+export type Place = "floor" | "office";
+
+const placeRoles: Record<Place, readonly Role[]> = {
   floor: ["floor", "planner", "office"],
   office: ["office"],
-} as const satisfies Record<string, readonly Role[]>;
+};
 
-export function mayEnter(place: keyof typeof placeRoles, role: Role): boolean {
-  const roles: readonly Role[] = placeRoles[place];
-  return roles.includes(role);
+/** Whether the role may enter the place; the server decides for every record, this only spares a walk to a closed door. */
+export function mayEnter(place: Place, role: Role): boolean {
+  return placeRoles[place].includes(role);
 }
