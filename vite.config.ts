@@ -4,9 +4,18 @@ import { defineConfig } from "vitest/config";
 
 const onDatabase = ["./tests/support/global-setup.ts"];
 
+/** In development the client's own server stands in front and hands these to the product's server. */
+const serverOrigin = process.env["SERVER_ORIGIN"] ?? "http://127.0.0.1:4701";
+const serverPaths = ["/api", "/healthz", "/readyz"];
+
 export default defineConfig({
   plugins: [react(), tailwindcss()],
   publicDir: "web/public",
+  server: {
+    proxy: Object.fromEntries(serverPaths.map((path) => [path, { target: serverOrigin }])),
+    // What tests and the running shop write is no reason to reload.
+    watch: { ignored: ["**/.data/**", "**/dist/**", "**/tests/**", "**/server/**"] },
+  },
   build: {
     outDir: "dist",
     emptyOutDir: true,

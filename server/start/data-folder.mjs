@@ -36,6 +36,13 @@ async function checkSpace(folder) {
   );
 }
 
+const outside = (root) => `/var/lib/blockwright-${checkoutHash(root)}`;
+
+/** Where the data of a use may lie, whether or not they are there. */
+export function possibleDataFolders(use, root = checkout) {
+  return [join(root, ".data", use), join(outside(root), use)];
+}
+
 /**
  * The folder that keeps everything of one use ("shop" or "test"): under .data in the checkout, or, where
  * PostgreSQL's user cannot enter the checkout, under /var/lib.
@@ -48,7 +55,7 @@ export async function dataFolderFor(
   await make(inside);
   let base = inside;
   if (databaseUser !== undefined && !(await canEnter(databaseUser, inside))) {
-    base = `/var/lib/blockwright-${checkoutHash(root)}`;
+    base = outside(root);
     await make(base);
     say(`The database's user cannot enter ${root}: data are kept in ${base}.`);
   }

@@ -1,6 +1,7 @@
 import { join } from "node:path";
 import { hashOfFiles } from "./file-hash.mjs";
 import { checkout } from "./locations.mjs";
+import { isEntry } from "./entry.mjs";
 import { runCommand, StartFailure } from "./failure.mjs";
 import { recordOf, stillRuns } from "./alive.mjs";
 import { clusterVersion, startCluster, stopCluster } from "./cluster.mjs";
@@ -15,6 +16,8 @@ import { secretsOf } from "./secrets.mjs";
 const forSpeed = "fsync = off\nsynchronous_commit = off\nfull_page_writes = off\n";
 
 async function open() {
+  // The package comes first: it brings the user that must be able to enter the data folder.
+  await ensurePostgres();
   const data = await dataFolderFor("test");
   const folder = join(data, "postgres");
   const programs = await ensurePostgres(await clusterVersion(folder));
@@ -68,7 +71,7 @@ export async function releaseTestCluster(processId) {
   });
 }
 
-if (process.argv[1] === import.meta.filename) {
+if (isEntry(import.meta.filename)) {
   await runCommand(async () => {
     const processId = Number(process.argv[3]);
     if (process.argv[2] === "acquire")

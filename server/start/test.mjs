@@ -7,6 +7,7 @@ import { runCommand, say } from "./failure.mjs";
 import { checkout } from "./locations.mjs";
 import { prepareMachine } from "./preparation.mjs";
 import { readJsonFile } from "./private-file.mjs";
+import { countTests } from "./test-count.mjs";
 import { acquireTestCluster, releaseTestCluster } from "./test-cluster.mjs";
 import { ensureWebBuild } from "./web-build.mjs";
 
@@ -34,16 +35,6 @@ function runVitest(args) {
   });
 }
 
-/** Counts passed and failed tests; a file that could not be run and a failure outside of tests count as failed. */
-export function countTests(report, exitCode) {
-  const brokenFiles = (report?.testResults ?? []).filter(
-    (file) => file.status === "failed" && !file.assertionResults.some((test) => test.status === "failed"),
-  ).length;
-  const passed = report?.numPassedTests ?? 0;
-  const failed = (report?.numFailedTests ?? 0) + brokenFiles;
-  return { passed, failed: failed === 0 && exitCode !== 0 && passed > 0 ? 1 : failed };
-}
-
 async function main() {
   const args = process.argv.slice(2);
   await prepareMachine();
@@ -67,4 +58,4 @@ async function main() {
   }
 }
 
-if (process.argv[1] === import.meta.filename) await runCommand(main);
+await runCommand(main);

@@ -1,6 +1,7 @@
 import { readFile, writeFile } from "node:fs/promises";
 import { join } from "node:path";
 import { hashOfFiles } from "./file-hash.mjs";
+import { isEntry } from "./entry.mjs";
 import { runCommand, say, StartFailure } from "./failure.mjs";
 import { runProgram } from "./command.mjs";
 import { withLock } from "./lock.mjs";
@@ -48,4 +49,4 @@ export async function ensureWebBuild() {
   });
 }
 
-if (process.argv[1] === import.meta.filename) await runCommand(ensureWebBuild);
+if (isEntry(import.meta.filename)) await runCommand(ensureWebBuild);
