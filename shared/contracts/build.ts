@@ -1,4 +1,5 @@
 import { z } from "zod";
+import { workCentreSchema } from "../catalogue/catalogue.ts";
 
 /** Twelve characters that can be cut into iron: capitals, digits, blank, dot and hyphen. */
 export const engravingSchema = z
@@ -52,7 +53,8 @@ export const buildViewSchema = z.object({
   priceCents: z.int(),
   weight: z.number(),
   /** Minutes of one block at each work centre. */
-  minutes: z.record(z.string(), z.int()),
+  minutes: z.partialRecord(workCentreSchema, z.int().min(0)),
+  leadDays: z.int().min(0),
   shipsOn: z.iso.date(),
 });
 export type BuildView = z.infer<typeof buildViewSchema>;

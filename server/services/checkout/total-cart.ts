@@ -1,0 +1,95 @@
+import { createHash } from "node:crypto";
+import { stripeGateway } from "#server/gateways/payment-gateway.ts";
+import { currentContext } from "#server/services/catalogue/current-context.ts";
+import { readCart } from "#server/services/cart/read-cart.ts";
+import { shopSettings } from "#server/services/shop/shop-settings.ts";
+import { Refusal } from "#server/services/refusal.ts";
+import type { CartHolder } from "#server/services/cart/find-cart.ts";
+import type { Address, Delivery } from "#shared/contracts/address.ts";
+import type { CartView } from "#shared/contracts/cart.ts";
+import type { Totals } from "#shared/contracts/checkout.ts";
+import { freightCents } from "#shared/freight/freight.ts";
+
+/** A cart with all that it costs, delivered, and who said what the tax is. */
+export interface TotalledCart {
+  cart: CartView;
+  totals: Totals;
+  taxLabel: string;
+  taxCalculation: string;
+  catalogueVersion: number;
+  priceListVersion: number;
+}
+
+/**
+ * Prices the holder's cart anew and asks for its tax (a call to the outside: never within a transaction).
+ * @throws Refusal conflict for an empty cart, build-refused when a line can no longer be made; GatewayUnavailable
+ */
+export async function totalCart(holder: CartHolder, delivery: Delivery): Promise<TotalledCart> {
+  const cart = await readCart(holder);
+  if (cart.refused.length > 0) {
+    throw new Refusal(
+      "build-refused",
+      "A block in the cart can no longer be made as it stands. Open the cart to mend or remove it.",
+    );
+  }
+  if (cart.lines.length === 0) throw new Refusal("conflict", "The cart is empty.");
+  const { catalogue, priceList } = await currentContext();
+  const freight =
+    delivery.method === "freight" ? freightCents(priceList, delivery.address.postalCode, cart.blocks) : 0;
+  const address = delivery.method === "freight" ? delivery.address : await shopAddress();
+  const lines = cart.lines.map((line) => ({ reference: line.id, amountCents: line.totalCents }));
+  const tax = await stripeGateway.askTax({
+    currency: "usd",
+    lines,
+    freightCents: freight,
+    address,
+    idempotencyKey: `tax-${hashOf({ lines, freight, address, on: new Date().toISOString().slice(0, 13) })}`,
+  });
+  return {
+    cart,
+    totals: totalsOf(cart, delivery, freight, tax),
+    taxLabel: tax.rateLabel,
+    taxCalculation: tax.calculationId,
+    catalogueVersion: catalogue.version,
+    priceListVersion: priceList.version,
+  };
+}
+
+async function shopAddress(): Promise<Address> {
+  return (await shopSettings()).address;
+}
+
+function totalsOf(
+  cart: CartView,
+  delivery: Delivery,
+  freight: number,
+  tax: { taxCents: number; rateLabel: string },
+): Totals {
+  const blocks = cart.lines.map((line) => ({
+    kind: "block" as const,
+    label: line.build.summary,
+    quantity: line.quantity,
+    amountCents: line.totalCents,
+  }));
+  const freightLabel =
+    delivery.method === "freight"
+      ? `Freight to ${delivery.address.state} ${delivery.address.postalCode.slice(0, 5)}`
+      : "Pick-up at the shop";
+  return {
+    currency: "USD",
+    lines: [
+      ...blocks,
+      { kind: "freight", label: freightLabel, quantity: 1, amountCents: freight },
+      { kind: "tax", label: tax.rateLabel, quantity: 1, amountCents: tax.taxCents },
+    ],
+    goodsCents: cart.totalCents,
+    freightCents: freight,
+    taxCents: tax.taxCents,
+    totalCents: cart.totalCents + freight + tax.taxCents,
+  };
+}
+
+/** A short fingerprint of plain data. */
+export function hashOf(value: unknown): string {
+  return createHash("sha256").update(JSON.stringify(value)).digest("hex");
+}

@@ -1,0 +1,31 @@
+import { transaction } from "#server/database/transaction.ts";
+import { stripeGateway } from "#server/gateways/payment-gateway.ts";
+import { enqueue } from "#server/jobs/queue.ts";
+import { Payment } from "#server/models/payment.ts";
+import { expirePayment } from "./expire-payment.ts";
+import { openPayment } from "./open-payment.ts";
+import { recordPayment } from "./record-payment.ts";
+
+/**
+ * Asks Stripe how an unfinished payment stands, for the case that its webhook never came, and finishes what a crash
+ * left open. While the page can still be paid, it comes back after the page's end.
+ * @throws GatewayUnavailable (the job is then tried again)
+ */
+export async function checkPayment(paymentId: string): Promise<void> {
+  const payment = await Payment.findByPk(paymentId);
+  if (!payment || (payment.state !== "opening" && payment.state !== "open")) return;
+  const { sessionId } = await openPayment(paymentId);
+  const session = await stripeGateway.readCheckoutSession(sessionId);
+  if (session.status === "complete") {
+    await transaction(() => recordPayment(session));
+    return;
+  }
+  if (session.status === "expired") {
+    await transaction(() =>
+      expirePayment(paymentId, "The payment page ended without a payment; nothing was charged."),
+    );
+    return;
+  }
+  const again = Math.max(payment.expiresAt.getTime() + 60_000, Date.now() + 60_000);
+  await transaction(() => enqueue("check-payment", { paymentId }, { startAfter: new Date(again) }));
+}
