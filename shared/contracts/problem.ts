@@ -1,7 +1,10 @@
 import { z } from "zod";
 
-/** RFC 9457 problem details; `errors` points at each field that has to be mended. */
-export const problemSchema = z.object({
+/**
+ * RFC 9457 problem details; `errors` points at each field that has to be mended. A kind of problem may carry members
+ * of its own, such as `orderNumber` with payment-closed.
+ */
+export const problemSchema = z.looseObject({
   type: z.string(),
   title: z.string(),
   status: z.int(),
