@@ -136,7 +136,7 @@ function HeaderCell<Row>({ column, sort, parameter }: HeaderCellProps<Row>) {
   if (column.sortBy === undefined) {
     return (
       <th scope="col" className={look}>
-        {column.header}
+        <span className="inline-flex min-h-6 items-center">{column.header}</span>
       </th>
     );
   }
@@ -153,8 +153,8 @@ function HeaderCell<Row>({ column, sort, parameter }: HeaderCellProps<Row>) {
       >
         {column.header}
         <svg viewBox="0 0 8 12" aria-hidden="true" className="w-2">
-          <path d="M0 5 4 0l4 5z" fill={direction === "ascending" ? "var(--dye)" : "var(--rule)"} />
-          <path d="m0 7 4 5 4-5z" fill={direction === "descending" ? "var(--dye)" : "var(--rule)"} />
+          <path d="M0 5 4 0l4 5z" fill={direction === "ascending" ? "var(--dye)" : "var(--edge)"} />
+          <path d="m0 7 4 5 4-5z" fill={direction === "descending" ? "var(--dye)" : "var(--edge)"} />
         </svg>
       </Link>
     </th>

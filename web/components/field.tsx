@@ -61,7 +61,7 @@ export function controlLook(error: string | undefined, className?: string) {
   return classNames(
     "block min-h-target w-full rounded border bg-sheet px-3 py-2 text-base text-ink placeholder:text-iron",
     "hover:border-ink in-data-[place=floor]:min-h-target-floor",
-    "read-only:bg-wash disabled:bg-wash",
+    "[&[readonly]]:bg-wash disabled:bg-wash",
     error === undefined ? "border-edge" : "border-2 border-stop",
     className,
   );

@@ -22,16 +22,18 @@ export function FigureList({ figures, undecided = "to be confirmed" }: FigureLis
   return (
     <dl className="border-t border-rule">
       {figures.map((figure) => (
-        <div key={figure.id} className="border-b border-rule py-2">
-          <div className="flex items-baseline gap-2">
-            <dt>{figure.name}</dt>
-            <span aria-hidden="true" className="mb-1 min-w-4 grow border-b border-dotted border-edge" />
-            <dd className="text-right text-lg numerals">
-              {figure.value ?? <span className="font-sans text-sm font-normal text-iron">{undecided}</span>}
-            </dd>
-          </div>
+        <div
+          key={figure.id}
+          className="grid grid-cols-[1fr_auto] items-baseline gap-x-2 border-b border-rule py-2"
+        >
+          <dt className="flex items-baseline gap-2 after:mb-1 after:min-w-4 after:grow after:border-b after:border-dotted after:border-edge">
+            {figure.name}
+          </dt>
+          <dd className="text-right text-lg numerals">
+            {figure.value ?? <span className="font-sans text-sm font-normal text-iron">{undecided}</span>}
+          </dd>
           {(figure.limit !== undefined || figure.formula !== undefined) && (
-            <dd className="flex flex-wrap justify-between gap-x-4 text-sm text-iron">
+            <dd className="col-span-2 flex flex-wrap justify-between gap-x-4 text-sm text-iron">
               {figure.formula === undefined ? <span /> : <Formula>{figure.formula}</Formula>}
               {figure.limit !== undefined && <span className="numerals">{figure.limit}</span>}
             </dd>

@@ -19,9 +19,9 @@ const ground = { stop: "bg-stop-wash", caution: "bg-caution-wash", note: "" } as
 /** One finding of the rules: word, shape and colour together. Put several in a `<ul>`. */
 export function Finding({ severity, children, why, action, undecided = false }: FindingProps) {
   return (
-    <li className={`flex items-start gap-3 border-b border-rule px-3 py-2.5 ${ground[severity]}`}>
+    <li className={`flex flex-wrap items-start gap-x-3 border-b border-rule px-3 py-2.5 ${ground[severity]}`}>
       <StateMark kind={severity} className="mt-1 size-4 shrink-0" />
-      <div className="min-w-0 grow">
+      <div className="min-w-0 grow basis-60">
         <p>
           <span className={`font-semibold ${ink[severity]}`}>{words[severity]}.</span> {children}
           {undecided && <span className="text-iron"> To be confirmed.</span>}

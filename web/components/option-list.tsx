@@ -114,7 +114,9 @@ function Row({ name, option, chosen, onChoose, onArrow }: RowProps) {
       className={classNames(
         "relative border-t border-rule",
         chosen && "bg-dye-wash shadow-[inset_4px_0_0_var(--dye)]",
-        closed === undefined ? !chosen && "hover:bg-wash" : "hatch",
+        closed === undefined
+          ? !chosen && "hover:bg-wash"
+          : "before:absolute before:inset-y-0 before:left-0 before:w-2 before:hatch",
       )}
     >
       <label

@@ -44,7 +44,7 @@ export function SiteHeader({ session, place, home, entries, withCart, onFloor }:
       </div>
       <div className="relative border-t-2 border-ink bg-paper">
         <Progress />
-        <div aria-hidden="true" className="mx-auto max-w-page scale-edge" />
+        <div aria-hidden="true" className="scale-edge" />
       </div>
     </header>
   );
