@@ -90,7 +90,14 @@ function answer(
       send(response, checkoutPage({ ...view, refused: result.message }));
       break;
     case "invalid":
-      send(response, checkoutPage({ ...view, problems: result.problems }));
+      send(
+        response,
+        checkoutPage({
+          ...view,
+          problems: result.problems,
+          refused: "Nothing was charged. Check the fields marked below.",
+        }),
+      );
       break;
     case "closed":
       send(response, closedPage(merchant, session));

@@ -23,6 +23,8 @@ export interface StripeSettings {
   webhookSecret: string;
   /** Left out: the real service. Set: a stand-in of ours, such as http://127.0.0.1:4801. */
   apiOrigin?: string | undefined;
+  /** How long one try may take; 10 s if left out. */
+  timeoutMilliseconds?: number | undefined;
 }
 
 /** Every method may throw GatewayUnavailable or GatewayRefused; `readWebhook` throws WebhookSignatureError. */
@@ -41,7 +43,7 @@ const RETRIES = 2;
 /** Makes the one way to the payment service. Opens no connection by itself. */
 export function createStripeGateway(settings: StripeSettings): StripeGateway {
   const stripe = new Stripe(settings.secretKey, {
-    timeout: TIMEOUT_MILLISECONDS,
+    timeout: settings.timeoutMilliseconds ?? TIMEOUT_MILLISECONDS,
     maxNetworkRetries: RETRIES,
     telemetry: false,
     ...addressOf(settings.apiOrigin),

@@ -10,6 +10,7 @@ interface CheckoutPage {
   /** What was typed before; number and CVC are asked again. */
   typed?: Pick<CardEntry, "expiry" | "name">;
   problems?: CardProblems;
+  /** Why it was not paid. */
   refused?: string;
 }
 
@@ -75,7 +76,7 @@ export function checkoutPage(view: CheckoutPage): string {
           </p>`
     }
   `;
-  return page(view.refused === undefined ? "Pay" : "Payment declined", view.merchant, content);
+  return page(view.refused === undefined ? "Pay" : "Not paid", view.merchant, content);
 }
 
 function orderTable(view: CheckoutPage, total: string): Html {

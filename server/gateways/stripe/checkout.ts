@@ -13,7 +13,7 @@ export interface CheckoutRequest {
   /** May hold `{CHECKOUT_SESSION_ID}`, which Stripe fills in. */
   successUrl: string;
   cancelUrl: string;
-  /** From 30 minutes to 24 hours ahead. */
+  /** From 30 minutes to 24 hours ahead, counted when Stripe gets it: leave a minute to spare at either end. */
   expiresAt: Date;
   idempotencyKey: string;
 }
