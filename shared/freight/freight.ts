@@ -37,3 +37,10 @@ export function quoteFreight(priceList: PriceList, delivery: Delivery, blocks: n
   }
   return { ok: true, perBlockCents: rate, totalCents: rate * blocks, zone };
 }
+
+/** Freight for a number of blocks to a US ZIP code, whole cents. Throws RangeError, with a plain sentence, where there is no rate. */
+export function freightCents(priceList: PriceList, postalCode: string, blocks: number): Cents {
+  const quote = quoteFreight(priceList, { method: "freight", postalCode }, blocks);
+  if (!quote.ok) throw new RangeError(quote.message);
+  return quote.totalCents;
+}

@@ -30,6 +30,12 @@ export function amountText(amount: Cents, currency: string): string {
   return amount < 0 ? `-${text}` : text;
 }
 
+/** US dollars as a reader sees them, e.g. 431000 -> "$4,310.00", -500 -> "-$5.00". */
+export function formatCents(amount: Cents): string {
+  const [whole = "0", fraction = "00"] = amountText(Math.abs(amount), "USD").split(".");
+  return `${amount < 0 ? "-" : ""}$${whole.replace(/\B(?=(\d{3})+$)/g, ",")}.${fraction}`;
+}
+
 function requireWhole(amount: number): void {
   if (!Number.isSafeInteger(amount)) throw new RangeError(`${amount} is not a whole number of cents`);
 }

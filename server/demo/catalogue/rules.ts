@@ -1,0 +1,388 @@
+import { basaltBores, boreId, gneissBores, marlBores } from "./bores.ts";
+import type { RuleDocument } from "./document.ts";
+
+type ExpressionRule = Extract<RuleDocument, { kind: "expression" }>;
+type ConditionDocument = ExpressionRule["require"];
+
+const common = "Common practice, no published source.";
+const invented = "House limit, invented for the demo.";
+
+const choice = (id: string, ...options: string[]): ConditionDocument => ({ choice: id, in: options });
+const figureAtLeast = (figure: string, constant: number): ConditionDocument => ({
+  left: { figure },
+  is: ">=",
+  right: { constant },
+});
+const figureAtMost = (figure: string, constant: number): ConditionDocument => ({
+  left: { figure },
+  is: "<=",
+  right: { constant },
+});
+const numberAtMost = (number: string, constant: number): ConditionDocument => ({
+  left: { number },
+  is: "<=",
+  right: { constant },
+});
+const largeSpacing: ConditionDocument = { left: { value: "boreSpacing" }, is: ">", right: { constant: 4.4 } };
+
+const castingRules: RuleDocument[] = [
+  {
+    id: "bores-by-family",
+    kind: "table",
+    severity: "stop",
+    sentence: "Marl is bored 4.000 to 4.155 in, Basalt 4.000 to 4.200 in, Gneiss 4.440 to 4.640 in.",
+    why: `Each casting's barrels and spacing set its range. ${invented}`,
+    choices: ["family", "bore"],
+    rows: [
+      [["marl"], marlBores.map(boreId)],
+      [["basalt"], basaltBores.map(boreId)],
+      [["gneiss"], gneissBores.map(boreId)],
+    ],
+  },
+  {
+    id: "wall-naturally-aspirated",
+    kind: "expression",
+    severity: "stop",
+    sentence: "A naturally aspirated engine needs a cylinder wall of 0.200 in or more.",
+    why: `Thin walls bend under the piston's thrust and lose ring seal. ${common}`,
+    when: choice("induction", "naturallyAspirated"),
+    require: figureAtLeast("wall", 0.2),
+  },
+  {
+    id: "wall-boosted",
+    kind: "expression",
+    severity: "stop",
+    sentence: "Boost or nitrous needs a cylinder wall of 0.250 in or more.",
+    why: `Higher cylinder pressure spreads the barrel. ${common}`,
+    when: choice("induction", "boosted", "nitrous"),
+    require: figureAtLeast("wall", 0.25),
+  },
+  {
+    id: "web-least",
+    kind: "expression",
+    severity: "stop",
+    sentence: "At least 0.200 in of iron must stay between two bores.",
+    why: `The gasket's fire ring seals on it. ${invented}`,
+    require: figureAtLeast("web", 0.2),
+  },
+  {
+    id: "wall-near-limit",
+    kind: "expression",
+    severity: "caution",
+    sentence: "With a nominal wall under 0.230 in, ask for the sonic report before boring on.",
+    why: `Cores shift in the mould; only a reading shows the true wall. ${common}`,
+    when: choice("sonicReport", "noSonic"),
+    require: figureAtLeast("wall", 0.23),
+  },
+  {
+    id: "large-head-thread",
+    kind: "expression",
+    severity: "stop",
+    sentence: "At 4.400 in spacing, 1/2-13 head threads go with bores up to 4.165 in.",
+    why: `The larger hole comes too near the barrel. ${invented}`,
+    when: choice("headThread", "t12"),
+    require: { any: [largeSpacing, { left: { value: "bore" }, is: "<=", right: { constant: 4.165 } }] },
+  },
+  {
+    id: "groove-or-fine-deck",
+    kind: "expression",
+    severity: "stop",
+    sentence: "A deck groove and the fine finish for multi-layer steel gaskets exclude each other.",
+    why: `The gasket's layers would bridge the groove and leak. ${common}`,
+    when: choice("deckGroove", "wire", "receiver"),
+    require: choice("deckFinish", "standard"),
+  },
+  {
+    id: "finish-hone-pistons",
+    kind: "expression",
+    severity: "note",
+    sentence:
+      "The finish hone is to the nominal bore: measure your pistons first, the clearance cannot be put back.",
+    why: `Piston makers size skirts for a clearance below the nominal bore. ${common}`,
+    require: choice("boreFinish", "rough", "semiFinished"),
+  },
+  {
+    id: "left-to-finish",
+    kind: "expression",
+    severity: "note",
+    sentence:
+      "The cylinders are delivered under size: bore and hone them to your pistons with a torque plate.",
+    why: `Only the cylinders are left to the builder. ${common}`,
+    require: choice("boreFinish", "finishHoned"),
+  },
+];
+
+const loadRules: RuleDocument[] = [
+  {
+    id: "two-bolt-load",
+    kind: "expression",
+    severity: "stop",
+    sentence: "Two-bolt main caps are for up to 450 hp and 6,000 rpm.",
+    why: `Beyond that the caps walk on their registers. ${invented}`,
+    when: choice("capStyle", "twoBolt"),
+    require: { all: [numberAtMost("powerAim", 450), numberAtMost("rpmAim", 6000)] },
+  },
+  {
+    id: "straight-four-bolt-load",
+    kind: "expression",
+    severity: "stop",
+    sentence: "Straight four-bolt caps are for up to 600 hp and 7,000 rpm.",
+    why: `The outer bolts pull on the thin outer case. ${invented}`,
+    when: choice("capStyle", "fourBoltStraight"),
+    require: { all: [numberAtMost("powerAim", 600), numberAtMost("rpmAim", 7000)] },
+  },
+  {
+    id: "splayed-ductile-load",
+    kind: "expression",
+    severity: "stop",
+    sentence: "Splayed ductile-iron caps are for up to 850 hp and 8,000 rpm; above that take billet steel.",
+    why: `Ductile iron bends where billet steel still holds. ${invented}`,
+    when: choice("capStyle", "fourBoltSplayedDuctile"),
+    require: { all: [numberAtMost("powerAim", 850), numberAtMost("rpmAim", 8000)] },
+  },
+  {
+    id: "caps-by-family",
+    kind: "table",
+    severity: "stop",
+    sentence:
+      "Marl takes two-bolt, straight and splayed ductile caps; Basalt and Gneiss take any four-bolt cap.",
+    why: `Billet caps need the race castings' wide pan rail, which is drilled for four bolts. ${invented}`,
+    choices: ["family", "capStyle"],
+    rows: [
+      [["marl"], ["twoBolt", "fourBoltStraight", "fourBoltSplayedDuctile"]],
+      [
+        ["basalt", "gneiss"],
+        ["fourBoltStraight", "fourBoltSplayedDuctile", "fourBoltSplayedBillet"],
+      ],
+    ],
+  },
+  {
+    id: "boost-needs-four-bolts",
+    kind: "expression",
+    severity: "stop",
+    sentence: "Boost and nitrous need four-bolt caps.",
+    why: `Cylinder pressure goes straight down into the caps. ${invented}`,
+    when: choice("induction", "boosted", "nitrous"),
+    require: { left: { value: "capBolts" }, is: ">=", right: { constant: 4 } },
+  },
+  {
+    id: "power-beyond-kind",
+    kind: "expression",
+    severity: "caution",
+    sentence: "The power aimed at should lie within what engines of this kind usually make.",
+    why: "Mean effective pressure by duty and induction, from memory. The block makes no power; heads, cam and fuel decide.",
+    require: { left: { number: "powerAim" }, is: "<=", right: { figure: "powerHigh" } },
+  },
+  {
+    id: "piston-speed",
+    kind: "expression",
+    severity: "caution",
+    sentence: "Above 25 m/s of mean piston speed, rods, pistons and rings need racing care.",
+    why: "House limit; published figures put racing engines near there.",
+    require: figureAtMost("meanPistonSpeed", 25),
+  },
+  {
+    id: "street-law",
+    kind: "expression",
+    severity: "note",
+    sentence: "On the road, local emissions and vehicle rules apply to a modified engine.",
+    why: "Not legal advice: ask the authority where the vehicle is registered.",
+    require: { not: choice("duty", "street") },
+  },
+  {
+    id: "marine-core-plugs",
+    kind: "expression",
+    severity: "stop",
+    sentence: "Marine duty needs threaded core plugs.",
+    why: `A plug that lets go floods the engine space. ${common}`,
+    when: choice("duty", "marine"),
+    require: choice("corePlugs", "threaded"),
+  },
+];
+
+const fitRules: RuleDocument[] = [
+  {
+    id: "rod-to-case-steel",
+    kind: "expression",
+    severity: "stop",
+    sentence: "Steel rods need 0.060 in to the case.",
+    why: `The crank bends and rods stretch at speed. ${common}`,
+    when: { word: "rodKind", in: ["steel", "shouldered"] },
+    require: figureAtLeast("rodToCase", 0.06),
+  },
+  {
+    id: "rod-to-case-aluminium",
+    kind: "expression",
+    severity: "stop",
+    sentence: "Aluminium rods need 0.080 in to the case.",
+    why: `Aluminium stretches and grows with heat more than steel. ${common}`,
+    when: { word: "rodKind", in: ["aluminium"] },
+    require: figureAtLeast("rodToCase", 0.08),
+  },
+  {
+    id: "counterweight-to-case",
+    kind: "expression",
+    severity: "stop",
+    sentence: "Counterweights need 0.060 in to the case.",
+    why: `The crank bends at speed. ${common}`,
+    require: figureAtLeast("counterweightToCase", 0.06),
+  },
+  {
+    id: "piston-proud",
+    kind: "expression",
+    severity: "stop",
+    sentence: "The piston may stand at most 0.005 in proud of the deck.",
+    why: `Nothing is left for the gasket and the head. ${invented}`,
+    require: figureAtLeast("deckClearance", -0.005),
+  },
+  {
+    id: "piston-short",
+    kind: "expression",
+    severity: "stop",
+    sentence: "The piston must come within 0.060 in of the deck.",
+    why: `The set is made for another deck height: compression and squish are lost. ${invented}`,
+    require: figureAtMost("deckClearance", 0.06),
+  },
+  {
+    id: "lobe-to-journal",
+    kind: "expression",
+    severity: "stop",
+    sentence: "Cam lobes must stay 0.010 in below the journals, or the cam does not go in.",
+    why: `The lobes pass through the bearings. ${common}`,
+    require: figureAtLeast("lobeToJournal", 0.01),
+  },
+  {
+    id: "skirt-exposure",
+    kind: "expression",
+    severity: "caution",
+    sentence: "With more than 0.450 in of skirt out of the barrel at bottom dead centre, the piston rocks.",
+    why: `A skirt guides only where the barrel holds it. ${invented}`,
+    require: figureAtMost("skirtExposure", 0.45),
+  },
+  {
+    id: "compression-height",
+    kind: "expression",
+    severity: "caution",
+    sentence: "Below 1.000 in of compression height the pin runs into the oil ring.",
+    why: `Ring lands get thin and a support rail is needed. ${invented}`,
+    require: { left: { value: "compressionHeight" }, is: ">=", right: { constant: 1 } },
+  },
+  {
+    id: "rod-ratio",
+    kind: "expression",
+    severity: "caution",
+    sentence: "Below a rod ratio of 1.45 the piston is pushed hard against the wall.",
+    why: `A short rod leans further. ${common}`,
+    require: figureAtLeast("rodRatio", 1.45),
+  },
+  {
+    id: "deep-relief-pan",
+    kind: "expression",
+    severity: "note",
+    sentence: "Deep relief comes close to the pan rail: check rail and pan before you fit the crank.",
+    why: `Little iron is left under the rail. ${common}`,
+    require: choice("strokeClearance", "asCast", "relieved"),
+  },
+  {
+    id: "one-piece-seal-main",
+    kind: "expression",
+    severity: "stop",
+    sentence: "The one-piece rear seal goes with the 2.450 in main only.",
+    why: `The seal's holder is cut into the smaller housing. ${invented}`,
+    when: choice("rearSeal", "onePiece"),
+    require: choice("mainSize", "m2450"),
+  },
+  {
+    id: "one-piece-seal-parts",
+    kind: "expression",
+    severity: "note",
+    sentence: "With the one-piece seal the crank's flange and the oil pan must match it.",
+    why: `The two seals use different flanges and pan ends. ${common}`,
+    require: choice("rearSeal", "twoPiece"),
+  },
+];
+
+const valveGearRules: RuleDocument[] = [
+  {
+    id: "retainer-bore",
+    kind: "expression",
+    severity: "stop",
+    sentence: "Rollers with production-type retainers come with 0.842 in lifters only.",
+    why: `The retainers are made for that size. ${common}`,
+    when: choice("lifterStyle", "rollerRetainers"),
+    require: choice("lifterBore", "l842"),
+  },
+  {
+    id: "retainer-valley",
+    kind: "expression",
+    severity: "stop",
+    sentence: "Production-type retainers need a valley machined for them, which only Marl has.",
+    why: `The spider bolts to bosses in the valley. ${common}`,
+    when: choice("lifterStyle", "rollerRetainers"),
+    require: { left: { value: "retainerValley" }, is: "=", right: { constant: 1 } },
+  },
+  {
+    id: "retainer-cam-height",
+    kind: "expression",
+    severity: "stop",
+    sentence: "Production-type retainers do not go with the raised cam.",
+    why: `The lifters sit too high for the guides. ${common}`,
+    when: choice("lifterStyle", "rollerRetainers"),
+    require: choice("camHeight", "standard"),
+  },
+  {
+    id: "keyed-bushing-bore",
+    kind: "expression",
+    severity: "stop",
+    sentence: "Keyed bushings are made for 0.937 in lifters only.",
+    why: `The keyway needs that diameter. ${common}`,
+    when: choice("lifterStyle", "rollerKeyed"),
+    require: choice("lifterBore", "l937"),
+  },
+  {
+    id: "largest-lifter-bore",
+    kind: "expression",
+    severity: "stop",
+    sentence: "0.937 in lifters run in keyed bushings only.",
+    why: `Straight in the iron they would break into the oil gallery. ${common}`,
+    when: choice("lifterBore", "l937"),
+    require: choice("lifterStyle", "rollerKeyed"),
+  },
+  {
+    id: "dry-sump-pump-pad",
+    kind: "expression",
+    severity: "stop",
+    sentence: "The dry sump's external feed takes the place of the fuel-pump pad.",
+    why: `Its line passes where the pump would sit. ${invented}`,
+    when: choice("oiling", "drySump"),
+    require: choice("fuelPumpPad", "plainPad"),
+  },
+  {
+    id: "belt-pump-pad",
+    kind: "expression",
+    severity: "stop",
+    sentence: "A belt drive leaves no eccentric for a mechanical fuel pump.",
+    why: `The pulley sits where the eccentric would be. ${common}`,
+    when: choice("camDrive", "belt"),
+    require: choice("fuelPumpPad", "plainPad"),
+  },
+  {
+    id: "raised-cam-pump-pad",
+    kind: "expression",
+    severity: "stop",
+    sentence: "With the raised cam the fuel pump's pushrod does not reach its pad.",
+    why: `The pad is cast for the standard cam. ${common}`,
+    when: choice("camHeight", "raised"),
+    require: choice("fuelPumpPad", "plainPad"),
+  },
+  {
+    id: "raised-cam-timing",
+    kind: "expression",
+    severity: "note",
+    sentence: "The raised cam has its own timing set, and the distributor must be shortened or replaced.",
+    why: `The centres are 0.400 in further apart. ${common}`,
+    require: choice("camHeight", "standard"),
+  },
+];
+
+export const rules: RuleDocument[] = [...castingRules, ...loadRules, ...fitRules, ...valveGearRules];
