@@ -1,15 +1,5 @@
 import { readFile, readlink } from "node:fs/promises";
 
-/** True while a process with this id lives, whoever owns it. */
-export function isAlive(processId) {
-  try {
-    process.kill(processId, 0);
-    return true;
-  } catch (error) {
-    return error.code === "EPERM";
-  }
-}
-
 /**
  * What tells this process from a later one with the same id: its start time in clock ticks since boot,
  * with the boot's own id. Undefined when there is no such process.

@@ -19,7 +19,7 @@ function causeOf(output) {
   const known = causes.find(([pattern]) => pattern.test(output));
   if (known !== undefined) return known[1];
   const line = output.split("\n").find((text) => /^(E:|dpkg:)/.test(text));
-  return line?.replace(/^E: /, "") ?? "apt-get gave no reason";
+  return line?.replace(/^E: |\.$/g, "") ?? "apt-get gave no reason";
 }
 
 /** Installs one of Debian's packages, without questions and without waiting for input. */

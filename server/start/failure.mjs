@@ -20,8 +20,12 @@ export function sentenceOf(error) {
   return `Start failed: ${message}`;
 }
 
+/** A reader that went away (a closed terminal, `npm start | head`) must not keep the rest from being stopped. */
+let heard = true;
+for (const stream of [process.stdout, process.stderr]) stream.on("error", () => (heard = false));
+
 export function say(sentence) {
-  process.stdout.write(`${sentence}\n`);
+  if (heard) process.stdout.write(`${sentence}\n`);
 }
 
 /** Runs a command's main function; a failure becomes one sentence on stderr and exit code 1. */
@@ -30,9 +34,9 @@ export async function runCommand(main) {
   try {
     code = (await main()) ?? 0;
   } catch (error) {
-    process.stderr.write(`${sentenceOf(error)}\n`);
+    if (heard) process.stderr.write(`${sentenceOf(error)}\n`);
   }
   process.exitCode = code;
-  if (process.stdout.writableNeedDrain) await once(process.stdout, "drain");
+  if (heard && process.stdout.writableNeedDrain) await once(process.stdout, "drain");
   process.exit(code);
 }

@@ -20,7 +20,8 @@ const demo = JSON.parse(await readFile(new URL("demo-shop.json", import.meta.url
 function productAddress() {
   const port = productPort();
   const host = process.env.HOST || "127.0.0.1";
-  const reachable = host === "0.0.0.0" || host === "::" ? "127.0.0.1" : host;
+  const anyAddress = host === "0.0.0.0" || host === "::";
+  const reachable = anyAddress ? "127.0.0.1" : host.includes(":") ? `[${host}]` : host;
   return { host, port, reachable, origin: process.env.PUBLIC_ORIGIN || `http://${reachable}:${port}` };
 }
 
@@ -29,7 +30,7 @@ async function startDatabase(folder, port, password) {
   const cluster = await startCluster({ programs, folder, port, password });
   const there = await cluster.run(`select 1 from pg_database where datname = '${database}'`);
   if (there === "") await cluster.run(`create database ${database}`);
-  return { ...cluster, logFolder: join(folder, "log") };
+  return cluster;
 }
 
 async function isReady(origin) {
@@ -102,7 +103,7 @@ async function openShop({
   const ports = await rememberedPorts(dataFolder, ["database", "stripe", "smtp", "mailbox", "server"]);
   say("Starting the database, the stand-ins for payments and mail, and the server ...");
   const cluster = await startDatabase(databaseFolder, ports.database, secrets.databasePassword);
-  supervision.watch("database", cluster.pid, cluster.logFolder);
+  await supervision.watch("database", cluster.pid, cluster.log);
   const server = behindAnother ? { host: "127.0.0.1", port: ports.server } : { host, port };
   const webhookUrl = `http://${behindAnother ? server.host : reachable}:${server.port}${webhookPath}`;
   const fakes = await startFakes(supervision, { dataFolder, ports, secrets, webhookUrl });

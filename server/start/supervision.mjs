@@ -1,7 +1,7 @@
 import { spawn } from "node:child_process";
 import { open, readFile } from "node:fs/promises";
 import { join } from "node:path";
-import { isAlive, pause } from "./alive.mjs";
+import { pause, recordOf, stillRuns } from "./alive.mjs";
 import { StartFailure } from "./failure.mjs";
 import { checkout } from "./locations.mjs";
 
@@ -9,7 +9,9 @@ const stopWithin = 10_000;
 
 /** The last thing a program wrote, in words: a log line's message where it is one. */
 async function lastWords(logFile) {
-  const lines = (await readFile(logFile, "utf8")).split("\n").filter((line) => line.trim() !== "");
+  const lines = (await readFile(logFile, "utf8"))
+    .split("\n")
+    .filter((line) => line.trim() !== "" && !line.startsWith('{"ready":'));
   // A stack ends with frames, and with Node's version: the error itself stands above them.
   const told = lines.filter((line) => !/^\s+at |^Node\.js v|^\s*[{}^]/.test(line) || line.startsWith('{"'));
   const error = told.findLast((line) => /error/i.test(line)) ?? told.at(-1);
@@ -73,10 +75,11 @@ export class Supervision {
   }
 
   /** Watches a program that is not a child of this process. */
-  watch(name, processId, logFolder) {
-    const timer = setInterval(() => {
-      if (isAlive(processId) || this.#stopping) return;
-      this.#fail(new StartFailure(`The ${name} stopped by itself: its log lies in ${logFolder}`));
+  async watch(name, processId, logFile) {
+    const record = await recordOf(processId);
+    const timer = setInterval(async () => {
+      if ((await stillRuns(record)) || this.#stopping) return;
+      this.#fail(new StartFailure(`The ${name} stopped by itself: its log is ${logFile}`));
     }, 1000);
     this.#watches.push(timer);
   }

@@ -13,7 +13,7 @@ import { readJsonFile, writePrivateFile } from "./private-file.mjs";
 import { secretsOf } from "./secrets.mjs";
 
 /** The tests' data may be lost with the machine, so nothing waits for the disk. */
-const forSpeed = "fsync = off\nsynchronous_commit = off\nfull_page_writes = off\n";
+const forSpeed = { fsync: "off", synchronous_commit: "off", full_page_writes: "off" };
 
 async function open() {
   // The package comes first: it brings the user that must be able to enter the data folder.

@@ -1,5 +1,5 @@
-import { readFile, writeFile } from "node:fs/promises";
-import { join } from "node:path";
+import { mkdir, readFile, writeFile } from "node:fs/promises";
+import { dirname, join } from "node:path";
 import { hashOfFiles } from "./file-hash.mjs";
 import { isEntry } from "./entry.mjs";
 import { runCommand, say, StartFailure } from "./failure.mjs";
@@ -39,6 +39,7 @@ export async function ensureWebBuild() {
     });
     if (code !== 0) {
       const report = join(checkout, ".data", "web-build.log");
+      await mkdir(dirname(report), { recursive: true });
       await writeFile(report, `${stdout}\n${stderr}`);
       const line = stderr.split("\n").find((text) => /error/i.test(text)) ?? "Vite gave no reason";
       throw new StartFailure(

@@ -59,7 +59,8 @@ export default async function setup(project: TestProject): Promise<() => Promise
     await runNodeWell([clusterProgram, "release", processId]);
   };
   try {
-    const cluster = answerSchema.parse(JSON.parse(answer));
+    // Lines above the last one tell what was installed or where the data lie.
+    const cluster = answerSchema.parse(JSON.parse(answer.trim().split("\n").at(-1) ?? ""));
     await makeTemplate(cluster.url, cluster.template);
     project.provide("testCluster", cluster);
   } catch (error) {
