@@ -12,7 +12,7 @@ export const up: Migration = async ({ context: sequelize }) => {
       email_verified_at timestamptz,
       disabled_at timestamptz,
       -- Sessions that began before this moment are over.
-      sessions_valid_from timestamptz NOT NULL DEFAULT '-infinity',
+      sessions_valid_from timestamptz NOT NULL DEFAULT 'epoch',
       created_at timestamptz NOT NULL DEFAULT now(),
       updated_at timestamptz NOT NULL DEFAULT now()
     );

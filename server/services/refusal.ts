@@ -1,0 +1,30 @@
+import type { Problem, ProblemKind } from "#shared/contracts/problem.ts";
+
+/**
+ * What a service answers when it will not do what it was asked; the API turns it into problem details. `detail` is a
+ * plain sentence for the reader, `errors` points at fields, `extra` are further members of the problem, `retryAfter`
+ * is in seconds.
+ */
+export class Refusal extends Error {
+  override readonly name = "Refusal";
+  readonly kind: ProblemKind;
+  readonly errors: NonNullable<Problem["errors"]> | undefined;
+  readonly extra: Record<string, unknown> | undefined;
+  readonly retryAfter: number | undefined;
+
+  constructor(
+    kind: ProblemKind,
+    detail: string,
+    more: {
+      errors?: NonNullable<Problem["errors"]>;
+      extra?: Record<string, unknown>;
+      retryAfter?: number;
+    } = {},
+  ) {
+    super(detail);
+    this.kind = kind;
+    this.errors = more.errors;
+    this.extra = more.extra;
+    this.retryAfter = more.retryAfter;
+  }
+}
