@@ -1,4 +1,4 @@
-export type FormValue = string | FormValue[] | FormFields;
+type FormValue = string | FormValue[] | FormFields;
 export interface FormFields {
   [name: string]: FormValue;
 }

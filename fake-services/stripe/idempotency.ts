@@ -19,6 +19,10 @@ export class Idempotency {
 
   constructor(state: State) {
     this.#state = state;
+    const oldest = Date.now() - KEPT_MILLISECONDS;
+    for (const [key, result] of Object.entries(state.idempotentResults)) {
+      if (result.createdAt < oldest) delete state.idempotentResults[key];
+    }
   }
 
   /**

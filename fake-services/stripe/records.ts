@@ -296,7 +296,6 @@ export type State = z.infer<typeof stateSchema>;
 export type Session = z.infer<typeof session>;
 export type LineItem = z.infer<typeof lineItem>;
 export type PaymentIntent = z.infer<typeof intent>;
-export type PaymentError = z.infer<typeof paymentError>;
 export type Charge = z.infer<typeof charge>;
 export type CardDetails = z.infer<typeof cardDetails>;
 export type Refund = z.infer<typeof refund>;

@@ -12,10 +12,9 @@ import { refund, type RefundAnswer, type RefundRequest } from "./stripe/refunds.
 import { askTax, type TaxAnswer, type TaxQuestion } from "./stripe/tax.ts";
 import { readWebhook, type StripeEvent } from "./stripe/webhook.ts";
 
-export type { CheckoutRequest, CheckoutSession, OpenedCheckoutSession } from "./stripe/checkout.ts";
+export type { CheckoutRequest, CheckoutSession } from "./stripe/checkout.ts";
 export { GatewayRefused, GatewayUnavailable, WebhookSignatureError } from "./stripe/errors.ts";
-export type { RefundAnswer, RefundRequest, RefundStatus } from "./stripe/refunds.ts";
-export type { TaxAddress, TaxAnswer, TaxQuestion } from "./stripe/tax.ts";
+export type { RefundAnswer } from "./stripe/refunds.ts";
 export type { StripeEvent } from "./stripe/webhook.ts";
 
 export interface StripeSettings {

@@ -11,7 +11,7 @@ export function page(title: string, merchant: string, content: Html): string {
       <link rel="icon" href="data:," />
     </head>
     <body>
-      <p class="notice">Test payment page: no real card is charged</p>
+      <header class="notice">Test payment page: no real card is charged</header>
       <main>
         <p class="merchant">${merchant}</p>
         ${content}

@@ -13,11 +13,10 @@ export interface RefundRequest {
 }
 
 const refundStatus = z.enum(["pending", "requires_action", "succeeded", "failed", "canceled"]);
-export type RefundStatus = z.infer<typeof refundStatus>;
 
 export interface RefundAnswer {
   refundId: string;
-  status: RefundStatus;
+  status: z.infer<typeof refundStatus>;
 }
 
 /** A refund as a webhook tells of it. */

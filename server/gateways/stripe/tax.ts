@@ -1,7 +1,7 @@
 import type Stripe from "stripe";
 import { callStripe } from "./errors.ts";
 
-export interface TaxAddress {
+interface TaxAddress {
   line1: string;
   line2?: string | undefined;
   city: string;

@@ -4,7 +4,7 @@ import { WebhookSignatureError } from "./errors.ts";
 import { asChangedRefund, type ChangedRefund } from "./refunds.ts";
 
 /** A payment that did not go through; the customer may try again on the same page. */
-export interface FailedPayment {
+interface FailedPayment {
   paymentIntentId: string | null;
   orderId: string | null;
   paymentId: string | null;
