@@ -74,7 +74,13 @@ const colours: Record<string, string> = Object.fromEntries(
 export default {
   content: ["./index.html", "./web/**/*.{ts,tsx}"],
   theme: {
-    colors: { ...colours, transparent: "transparent", current: "currentColor", inherit: "inherit" },
+    colors: {
+      ...colours,
+      shade: "rgb(0 0 0 / 0.55)",
+      transparent: "transparent",
+      current: "currentColor",
+      inherit: "inherit",
+    },
     fontFamily: {
       sans: ["Barlow", "system-ui", "sans-serif"],
       condensed: ['"Barlow Condensed"', "Barlow", "system-ui", "sans-serif"],

@@ -28,7 +28,7 @@ export function Dialog({ open, title, onClose, children, actions }: DialogProps)
       ref={box}
       aria-labelledby={titleId}
       onClose={onClose}
-      className="m-auto w-[min(36rem,calc(100vw-2rem))] rounded border-2 border-ink bg-sheet p-0 text-ink shadow-float backdrop:bg-ink/50"
+      className="m-auto w-[min(36rem,calc(100vw-2rem))] rounded border-2 border-ink bg-sheet p-0 text-ink shadow-float backdrop:bg-shade"
     >
       {open && (
         <div className="p-5 sm:p-6">

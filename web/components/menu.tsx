@@ -11,11 +11,13 @@ interface MenuProps {
   className?: string;
 }
 
-/** A button that opens a short list of links or actions. Escape or leaving it closes it; so does choosing. */
+/** A button that opens a short list of links or actions. Escape or leaving it closes it; so does choosing.
+ * Floats on wide screens; on phones it opens in the flow of the page, where it cannot be cut off. */
 export function Menu({ label, name, children, className }: MenuProps) {
   const [open, setOpen] = useState(false);
   const root = useRef<HTMLDivElement>(null);
   const button = useRef<HTMLButtonElement>(null);
+  const list = useRef<HTMLUListElement>(null);
   const listId = useId();
 
   useEffect(() => {
@@ -23,15 +25,22 @@ export function Menu({ label, name, children, className }: MenuProps) {
     const press = (event: PointerEvent) => {
       if (event.target instanceof Node && root.current?.contains(event.target) !== true) setOpen(false);
     };
+    const choose = (event: MouseEvent) => {
+      if (!(event.target instanceof Node) || list.current?.contains(event.target) !== true) return;
+      setOpen(false);
+      button.current?.focus();
+    };
     const escape = (event: KeyboardEvent) => {
       if (event.key !== "Escape") return;
       setOpen(false);
       button.current?.focus();
     };
     document.addEventListener("pointerdown", press);
+    document.addEventListener("click", choose);
     document.addEventListener("keydown", escape);
     return () => {
       document.removeEventListener("pointerdown", press);
+      document.removeEventListener("click", choose);
       document.removeEventListener("keydown", escape);
     };
   }, [open]);
@@ -41,7 +50,7 @@ export function Menu({ label, name, children, className }: MenuProps) {
       setOpen(false);
   };
   return (
-    <div ref={root} className="relative flex" onBlur={leave}>
+    <div ref={root} className="relative flex max-md:flex-col" onBlur={leave}>
       <button
         ref={button}
         type="button"
@@ -59,13 +68,10 @@ export function Menu({ label, name, children, className }: MenuProps) {
         </svg>
       </button>
       <ul
+        ref={list}
         id={listId}
         hidden={!open}
-        className="absolute top-full right-0 z-30 min-w-52 border-2 border-ink bg-sheet py-1 shadow-float"
-        // A press or Enter on an entry bubbles to here; the entries themselves are links and buttons.
-        onClickCapture={() => {
-          setOpen(false);
-        }}
+        className="border-rule bg-sheet max-md:border-t md:absolute md:top-full md:right-0 md:z-30 md:min-w-52 md:border-2 md:border-ink md:py-1 md:shadow-float"
       >
         {children}
       </ul>

@@ -1,4 +1,4 @@
-import { useRef, type KeyboardEvent, type ReactNode } from "react";
+import type { KeyboardEvent, ReactNode } from "react";
 import { FieldError } from "./field.tsx";
 import { StateMark } from "./state-mark.tsx";
 import { classNames } from "./class-names.ts";
@@ -45,7 +45,6 @@ export function OptionList({
   error,
   oneOpenNotice = "One option is open with the rest of the build as it stands.",
 }: OptionListProps) {
-  const list = useRef<HTMLDivElement>(null);
   const openCount = options.filter((option) => option.closed === undefined).length;
 
   const step = (event: KeyboardEvent<HTMLInputElement>, from: number) => {
@@ -54,7 +53,7 @@ export function OptionList({
     event.preventDefault();
     const next = options[(from + by + options.length) % options.length];
     if (next === undefined) return;
-    list.current?.querySelector<HTMLInputElement>(`[id="${CSS.escape(rowId(name, next.value))}"]`)?.focus();
+    document.getElementById(rowId(name, next.value))?.focus();
     if (next.closed === undefined && next.value !== value) onChoose(next.value);
   };
 
@@ -73,7 +72,7 @@ export function OptionList({
           {oneOpenNotice}
         </p>
       )}
-      <div ref={list} className="mt-3 border-b border-rule">
+      <div className="mt-3 border-b border-rule">
         {options.map((option, index) => (
           <Row
             key={option.value}
@@ -132,6 +131,7 @@ function Row({ name, option, chosen, onChoose, onArrow }: RowProps) {
           name={name}
           value={option.value}
           checked={chosen}
+          aria-labelledby={`${id}-name`}
           aria-disabled={closed !== undefined}
           aria-describedby={described.length === 0 ? undefined : described.join(" ")}
           onChange={() => {
@@ -145,7 +145,10 @@ function Row({ name, option, chosen, onChoose, onArrow }: RowProps) {
         />
         <span className="flex grow flex-wrap items-baseline justify-between gap-x-6 gap-y-0.5">
           <span className="min-w-0 grow basis-56">
-            <span className={classNames("font-medium", closed !== undefined && "text-iron")}>
+            <span
+              id={`${id}-name`}
+              className={classNames("font-medium", closed !== undefined && "text-iron")}
+            >
               {option.name}
             </span>
             {option.description !== undefined && (

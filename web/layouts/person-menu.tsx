@@ -6,7 +6,7 @@ import { api, nothing } from "#web/lib/api.ts";
 import { mayEnter, useStartAnew } from "#web/lib/session.ts";
 import type { SessionView } from "#shared/contracts/session.ts";
 
-const look = "border-l border-rule font-condensed text-lg font-semibold hover:bg-wash";
+const look = "border-rule md:border-l font-condensed text-lg font-semibold hover:bg-wash";
 
 /** Sign in, or the person's own menu. */
 export function PersonMenu({ session }: { session: SessionView | undefined }) {
@@ -17,10 +17,7 @@ export function PersonMenu({ session }: { session: SessionView | undefined }) {
   if (person === null || person === undefined) {
     const here = pathname.startsWith("/account/") ? "" : `?next=${encodeURIComponent(pathname + search)}`;
     return (
-      <Link
-        to={`/account/sign-in${here}`}
-        className={`flex min-h-12 items-center px-4 no-underline max-md:border-l-0 ${look}`}
-      >
+      <Link to={`/account/sign-in${here}`} className={`flex min-h-12 items-center px-4 no-underline ${look}`}>
         Sign in
       </Link>
     );
@@ -28,7 +25,7 @@ export function PersonMenu({ session }: { session: SessionView | undefined }) {
   return (
     <Menu
       label={<span className="max-w-40 truncate">{person.name}</span>}
-      className={`max-md:border-l-0 px-4 ${look}`}
+      className={`min-h-12 px-4 max-md:justify-between ${look}`}
     >
       <MenuEntry>
         <Link to="/account/orders">My orders</Link>

@@ -116,7 +116,7 @@ function Navigation({ entries, session, withCart, onFloor }: Omit<SiteHeaderProp
             ))}
           </ul>
         </nav>
-        <div className="flex items-stretch border-rule max-md:border-t md:border-r">
+        <div className="flex items-stretch divide-rule border-rule max-md:flex-col max-md:divide-y max-md:border-t md:border-r">
           <div className="hidden md:flex">{cart}</div>
           <PersonMenu session={session} />
           <ThemeMenu onFloor={onFloor} />

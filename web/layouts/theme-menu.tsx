@@ -15,8 +15,15 @@ export function ThemeMenu({ onFloor }: { onFloor: boolean }) {
   return (
     <Menu
       name="Light and dark"
-      label={<Present aria-hidden="true" className="size-5" strokeWidth={1.75} />}
-      className="border-l border-rule hover:bg-wash"
+      label={
+        <>
+          <Present aria-hidden="true" className="size-5" strokeWidth={1.75} />
+          <span className="grow text-left font-condensed text-lg font-semibold md:hidden">
+            Light and dark
+          </span>
+        </>
+      }
+      className="border-rule hover:bg-wash max-md:min-h-12 max-md:px-4 md:border-l"
     >
       {choices.map(({ choice: entry, name, Icon }) => (
         <MenuEntry key={entry}>

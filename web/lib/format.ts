@@ -1,3 +1,5 @@
+import { formatMillimetres, measuredLength } from "#shared/units/length.ts";
+
 const dollars = new Intl.NumberFormat("en-US", { style: "currency", currency: "USD" });
 const grouped = new Intl.NumberFormat("en-US");
 
@@ -29,9 +31,9 @@ export function inches(value: number, places = 4): string {
   return `${fixed(value, places)} in`;
 }
 
-/** Inches shown in millimetres: 1 in is 25.4 mm exactly. */
+/** Inches, read to 0.0001 in, shown in millimetres; halves are rounded away from zero. */
 export function millimetres(valueInInches: number, places = 2): string {
-  return `${fixed(valueInInches * 25.4, places)} mm`;
+  return `${formatMillimetres(measuredLength(valueInInches), places).replace("-", minus)} mm`;
 }
 
 /** Whole pounds: "187 lb". */
