@@ -1,5 +1,5 @@
 import { createHash } from "node:crypto";
-import { stripeGateway } from "#server/gateways/payment-gateway.ts";
+import { paymentGateway } from "#server/gateways/payment-gateway.ts";
 import { currentContext } from "#server/services/catalogue/current-context.ts";
 import { readCart } from "#server/services/cart/read-cart.ts";
 import { shopSettings } from "#server/services/shop/shop-settings.ts";
@@ -9,6 +9,7 @@ import type { Address, Delivery } from "#shared/contracts/address.ts";
 import type { CartView } from "#shared/contracts/cart.ts";
 import type { Totals } from "#shared/contracts/checkout.ts";
 import { freightCents } from "#shared/freight/freight.ts";
+import { estimateOrderShipDate } from "#shared/scheduling/estimate-order.ts";
 
 /** A cart with all that it costs, delivered, and who said what the tax is. */
 export interface TotalledCart {
@@ -18,6 +19,8 @@ export interface TotalledCart {
   taxCalculation: string;
   catalogueVersion: number;
   priceListVersion: number;
+  /** Of the whole order, ISO. */
+  estimatedShipOn: string;
 }
 
 /**
@@ -33,12 +36,12 @@ export async function totalCart(holder: CartHolder, delivery: Delivery): Promise
     );
   }
   if (cart.lines.length === 0) throw new Refusal("conflict", "The cart is empty.");
-  const { catalogue, priceList } = await currentContext();
+  const { catalogue, priceList, load, today } = await currentContext();
   const freight =
     delivery.method === "freight" ? freightCents(priceList, delivery.address.postalCode, cart.blocks) : 0;
   const address = delivery.method === "freight" ? delivery.address : await shopAddress();
   const lines = cart.lines.map((line) => ({ reference: line.id, amountCents: line.totalCents }));
-  const tax = await stripeGateway.askTax({
+  const tax = await paymentGateway.askTax({
     currency: "usd",
     lines,
     freightCents: freight,
@@ -52,6 +55,15 @@ export async function totalCart(holder: CartHolder, delivery: Delivery): Promise
     taxCalculation: tax.calculationId,
     catalogueVersion: catalogue.version,
     priceListVersion: priceList.version,
+    estimatedShipOn: estimateOrderShipDate(
+      cart.lines.map(({ quantity, build }) => ({
+        quantity,
+        minutes: build.minutes,
+        leadDays: build.leadDays,
+      })),
+      load,
+      today,
+    ),
   };
 }
 

@@ -1,6 +1,7 @@
 import { UniqueConstraintError } from "sequelize";
 import { transaction } from "#server/database/transaction.ts";
-import { stripeGateway } from "#server/gateways/payment-gateway.ts";
+import { paymentGateway } from "#server/gateways/payment-gateway.ts";
+import { GatewayRefused } from "#server/gateways/stripe.ts";
 import { enqueue } from "#server/jobs/queue.ts";
 import { Cart } from "#server/models/cart.ts";
 import { CartLine } from "#server/models/cart-line.ts";
@@ -12,6 +13,7 @@ import { hashOf, type TotalledCart, totalCart } from "#server/services/checkout/
 import { checkPayment } from "#server/services/payments/check-payment.ts";
 import { expirePayment } from "#server/services/payments/expire-payment.ts";
 import { openPayment } from "#server/services/payments/open-payment.ts";
+import { NEVER_PAID, sessionOf } from "#server/services/payments/payment-session.ts";
 import { Refusal } from "#server/services/refusal.ts";
 import type { PlacedOrder, PlaceOrderRequest } from "#shared/contracts/checkout.ts";
 import { formatCents } from "#shared/money/cents.ts";
@@ -51,13 +53,26 @@ export async function placeOrder(
     const standing = await settleStandingPayment(cart.id, contentHash);
     try {
       const paymentId = standing ?? (await writeOrder(cart.id, holder, request, totalled, contentHash));
-      const payment = await Payment.findByPk(paymentId, { rejectOnEmpty: true });
-      const order = await Order.findByPk(payment.orderId, { rejectOnEmpty: true });
-      const { url } = await openPayment(paymentId);
-      return { orderNumber: order.number, orderId: order.id, paymentUrl: url };
+      return await openedOrder(paymentId);
     } catch (error) {
       if (!(error instanceof UniqueConstraintError) || attempt >= 5) throw error;
     }
+  }
+}
+
+async function openedOrder(paymentId: string): Promise<PlacedOrder & { orderId: string }> {
+  const payment = await Payment.findByPk(paymentId, { rejectOnEmpty: true });
+  const order = await Order.findByPk(payment.orderId, { rejectOnEmpty: true });
+  try {
+    const { url } = await openPayment(paymentId);
+    return { orderNumber: order.number, orderId: order.id, paymentUrl: url };
+  } catch (error) {
+    if (!(error instanceof GatewayRefused)) throw error;
+    await transaction(() => expirePayment(paymentId, "The payment service refused to open a payment page."));
+    throw new Refusal(
+      "conflict",
+      `The payment service does not take this order: ${error.message} Nothing was charged; check the e-mail address, or call us.`,
+    );
   }
 }
 
@@ -66,13 +81,17 @@ async function settleStandingPayment(cartId: string, contentHash: string): Promi
   const payment = await Payment.findOne({ where: { cartId, state: ["opening", "open"] } });
   if (!payment) return null;
   const order = await Order.findByPk(payment.orderId, { rejectOnEmpty: true });
-  const { sessionId } = await openPayment(payment.id);
+  const sessionId = await sessionOf(payment);
+  if (sessionId === null) {
+    await transaction(() => expirePayment(payment.id, NEVER_PAID));
+    return null;
+  }
   const isSame = order.contentHash === contentHash && payment.expiresAt.getTime() - Date.now() > LEAST_LEFT;
   if (isSame) {
-    const session = await stripeGateway.readCheckoutSession(sessionId);
+    const session = await paymentGateway.readCheckoutSession(sessionId);
     if (session.status === "open") return payment.id;
   }
-  const ended = await stripeGateway.expireCheckoutSession(sessionId);
+  const ended = await paymentGateway.expireCheckoutSession(sessionId);
   if (ended === "already-complete") {
     await checkPayment(payment.id);
     throw paidAlready(order.number);
@@ -141,7 +160,15 @@ function orderValues(
   cartId: string,
   holder: CartHolder,
   { contact, delivery }: PlaceOrderRequest,
-  { cart, totals, taxLabel, taxCalculation, catalogueVersion, priceListVersion }: TotalledCart,
+  {
+    cart,
+    totals,
+    taxLabel,
+    taxCalculation,
+    catalogueVersion,
+    priceListVersion,
+    estimatedShipOn,
+  }: TotalledCart,
   contentHash: string,
 ) {
   const number = newOrderNumber();
@@ -173,7 +200,7 @@ function orderValues(
     taxCalculation,
     contentHash,
     searchText: words.join(" ").toLowerCase(),
-    estimatedShipOn: shipDates.at(-1) ?? "",
+    estimatedShipOn,
   };
 }
 

@@ -5,6 +5,10 @@ import { acceptedLoad } from "./accepted-load.ts";
 
 /** The ship date (ISO) that the present load allows for all blocks of an order that is not accepted yet. */
 export async function proposeShipDate(lines: OrderLine[]): Promise<string> {
-  const blocks = lines.map(({ quantity, build }) => ({ quantity, minutes: build.minutes, leadDays: build.leadDays }));
+  const blocks = lines.map(({ quantity, build }) => ({
+    quantity,
+    minutes: build.minutes,
+    leadDays: build.leadDays,
+  }));
   return estimateOrderShipDate(blocks, await acceptedLoad(), await today());
 }

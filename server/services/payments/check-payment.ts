@@ -1,9 +1,9 @@
 import { transaction } from "#server/database/transaction.ts";
-import { stripeGateway } from "#server/gateways/payment-gateway.ts";
+import { paymentGateway } from "#server/gateways/payment-gateway.ts";
 import { enqueue } from "#server/jobs/queue.ts";
 import { Payment } from "#server/models/payment.ts";
 import { expirePayment } from "./expire-payment.ts";
-import { openPayment } from "./open-payment.ts";
+import { NEVER_PAID, sessionOf } from "./payment-session.ts";
 import { recordPayment } from "./record-payment.ts";
 
 /**
@@ -14,16 +14,18 @@ import { recordPayment } from "./record-payment.ts";
 export async function checkPayment(paymentId: string): Promise<void> {
   const payment = await Payment.findByPk(paymentId);
   if (!payment || (payment.state !== "opening" && payment.state !== "open")) return;
-  const { sessionId } = await openPayment(paymentId);
-  const session = await stripeGateway.readCheckoutSession(sessionId);
+  const sessionId = await sessionOf(payment);
+  if (sessionId === null) {
+    await transaction(() => expirePayment(paymentId, NEVER_PAID));
+    return;
+  }
+  const session = await paymentGateway.readCheckoutSession(sessionId);
   if (session.status === "complete") {
     await transaction(() => recordPayment(session));
     return;
   }
   if (session.status === "expired") {
-    await transaction(() =>
-      expirePayment(paymentId, "The payment page ended without a payment; nothing was charged."),
-    );
+    await transaction(() => expirePayment(paymentId, NEVER_PAID));
     return;
   }
   const again = Math.max(payment.expiresAt.getTime() + 60_000, Date.now() + 60_000);

@@ -1,6 +1,6 @@
 import { config } from "#server/config.ts";
 import { transaction } from "#server/database/transaction.ts";
-import { stripeGateway } from "#server/gateways/payment-gateway.ts";
+import { paymentGateway } from "#server/gateways/payment-gateway.ts";
 import { OrderLine } from "#server/models/order-line.ts";
 import { Order } from "#server/models/order.ts";
 import { Payment } from "#server/models/payment.ts";
@@ -17,7 +17,7 @@ export async function openPayment(paymentId: string): Promise<{ sessionId: strin
   }
   const order = await Order.findByPk(payment.orderId, { rejectOnEmpty: true });
   const lines = await OrderLine.findAll({ where: { orderId: order.id }, order: [["position", "ASC"]] });
-  const opened = await stripeGateway.openCheckoutSession({
+  const opened = await paymentGateway.openCheckoutSession({
     orderNumber: order.number,
     orderId: order.id,
     paymentId: payment.id,

@@ -3,6 +3,7 @@ import type { StripeEvent } from "#server/gateways/stripe.ts";
 import { Payment } from "#server/models/payment.ts";
 import { StripeEventRecord } from "#server/models/stripe-event.ts";
 import { expirePayment } from "./expire-payment.ts";
+import { NEVER_PAID } from "./payment-session.ts";
 import { recordPayment } from "./record-payment.ts";
 import { recordRefund } from "./record-refund.ts";
 
@@ -27,10 +28,7 @@ async function act(event: StripeEvent): Promise<{ outcome: string; paymentId: st
     case "checkout-expired": {
       const payment = await Payment.findOne({ where: { checkoutSession: event.session.id } });
       if (!payment) return { outcome: "does not match", paymentId: null };
-      const changed = await expirePayment(
-        payment.id,
-        "The payment page ended without a payment; nothing was charged.",
-      );
+      const changed = await expirePayment(payment.id, NEVER_PAID);
       return { outcome: changed ? "expired" : "known already", paymentId: payment.id };
     }
     case "refund-changed":

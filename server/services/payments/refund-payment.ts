@@ -1,5 +1,5 @@
 import { transaction } from "#server/database/transaction.ts";
-import { stripeGateway } from "#server/gateways/payment-gateway.ts";
+import { paymentGateway } from "#server/gateways/payment-gateway.ts";
 import { Payment } from "#server/models/payment.ts";
 import { Refund } from "#server/models/refund.ts";
 import { recordRefund } from "./record-refund.ts";
@@ -14,7 +14,7 @@ export async function refundPayment(refundId: string): Promise<void> {
   if (refund.state !== "requested") return;
   const payment = await Payment.findByPk(refund.paymentId, { rejectOnEmpty: true });
   if (payment.paymentIntent === null) throw new Error(`payment ${payment.id} has nothing to return`);
-  const answer = await stripeGateway.refund({
+  const answer = await paymentGateway.refund({
     paymentIntentId: payment.paymentIntent,
     amountCents: refund.amountCents,
     reason: refund.reason === "paid-twice" ? "duplicate" : "requested_by_customer",
