@@ -1,8 +1,27 @@
 import { z } from "zod";
+import { readOrderNumber } from "../orders/order-number.ts";
 import { orderStateSchema } from "../orders/order-state.ts";
 import { contactSchema, deliverySchema } from "./address.ts";
 import { buildViewSchema } from "./build.ts";
 import { totalsSchema } from "./checkout.ts";
+import { emailAddressSchema } from "./person.ts";
+
+/** An order number in an address, read as leniently as a person types it. */
+export const orderNumberSchema = z
+  .string()
+  .transform((text) => readOrderNumber(text) ?? "")
+  .refine((number) => number !== "", "This is not an order number.");
+
+/** POST /api/orders/links */
+export const orderLinkRequestSchema = z.object({
+  orderNumber: z
+    .string()
+    .trim()
+    .min(1, "Write the order number.")
+    .max(20, "An order number looks like K7Q4-M2XD."),
+  email: emailAddressSchema,
+});
+export type OrderLinkRequest = z.infer<typeof orderLinkRequestSchema>;
 
 export const orderLineSchema = z.object({
   id: z.uuid(),

@@ -1,10 +1,16 @@
 import { Cart } from "#server/models/cart.ts";
 import { CartLine } from "#server/models/cart-line.ts";
+import type { Actor } from "#server/policies/actor.ts";
 
 /** Whose cart is meant: a person's open one, or a visitor's by the id that the session holds. */
 export interface CartHolder {
   personId: string | null;
   cartId: string | null;
+}
+
+/** The holder that an actor is. */
+export function holderOf(actor: Actor): CartHolder {
+  return { personId: actor.person?.id ?? null, cartId: actor.cartId };
 }
 
 /** The holder's open cart; null when there is none (a cart that was paid is closed). */
