@@ -1,5 +1,6 @@
-import type { ComponentProps, MouseEvent, ReactNode } from "react";
+import { useEffect, type ComponentProps, type MouseEvent, type ReactNode } from "react";
 import { Link } from "react-router-dom";
+import { useAnnounce } from "./announcer.tsx";
 import { classNames } from "./class-names.ts";
 
 type Look = "main" | "secondary" | "quiet" | "danger";
@@ -40,6 +41,10 @@ export function Button({
   onClick,
   ...rest
 }: ButtonProps) {
+  const announce = useAnnounce();
+  useEffect(() => {
+    if (busy && busyLabel !== undefined) announce(busyLabel);
+  }, [announce, busy, busyLabel]);
   const press = (event: MouseEvent<HTMLButtonElement>) => {
     if (busy) {
       event.preventDefault();
@@ -58,9 +63,7 @@ export function Button({
       className={classNames(base, looks[look], wide && "w-full", className)}
     >
       {busy ? <BusyMark /> : icon}
-      <span aria-live={busyLabel === undefined ? undefined : "polite"}>
-        {busy && busyLabel !== undefined ? busyLabel : children}
-      </span>
+      <span>{busy && busyLabel !== undefined ? busyLabel : children}</span>
     </button>
   );
 }

@@ -24,12 +24,14 @@ export function PageHeading({ title, over, lead, actions }: PageHeadingProps) {
   const site = useContext(SiteName);
   const { pathname } = useLocation();
   useEffect(() => {
+    document.title = site === null ? title : `${title} · ${site}`;
+  }, [site, title]);
+  useEffect(() => {
     if (pathname !== landing.path) landing.left = true;
     if (landing.left) heading.current?.focus({ preventScroll: true });
   }, [pathname]);
   return (
     <div className="flex flex-wrap items-end justify-between gap-x-8 gap-y-4">
-      <title>{site === null ? title : `${title} · ${site}`}</title>
       <div className="min-w-0">
         {over !== undefined && <p className="cell-label">{over}</p>}
         <h1 ref={heading} tabIndex={-1} className="text-2xl sm:text-3xl">
