@@ -1,4 +1,5 @@
 import { queryOptions } from "@tanstack/react-query";
+import type { Catalogue } from "#shared/catalogue/catalogue.ts";
 import type { CurrentCatalogue } from "#shared/contracts/catalogue.ts";
 import { api } from "./api.ts";
 
@@ -15,3 +16,15 @@ export const catalogueQuery = queryOptions({
     return currentCatalogueSchema.parse(answer);
   },
 });
+
+/** A catalogue of an earlier version, for codes that were made with it. It never changes. */
+export function earlierCatalogueQuery(version: number) {
+  return queryOptions({
+    queryKey: ["catalogue", version],
+    staleTime: Infinity,
+    queryFn: async ({ signal }): Promise<Catalogue> => {
+      const { catalogueSchema } = await import("#shared/catalogue/catalogue.ts");
+      return api.get(`/api/catalogue/${version}`, catalogueSchema, { signal });
+    },
+  });
+}

@@ -1,0 +1,172 @@
+import { createContext, useContext, useEffect, useMemo, useRef, useState, type ReactNode } from "react";
+import { useLocation } from "react-router-dom";
+import type { Build } from "#shared/catalogue/build.ts";
+import { searchToBuild } from "#shared/catalogue/build-address.ts";
+import type { CurrentCatalogue } from "#shared/contracts/catalogue.ts";
+import { evaluate } from "#shared/rules/evaluate.ts";
+import type { Evaluation, Mend } from "#shared/rules/evaluation.ts";
+import type { Wanted } from "#shared/rules/explain.ts";
+import { useAnnounce } from "#web/components/announcer.tsx";
+import { searchOf } from "./build-address.ts";
+import { noteBuildInProgress } from "./build-in-progress.ts";
+import { choiceName, optionName, outcomeWords } from "./build-words.ts";
+import { useHeldBuild } from "./held-build.ts";
+
+/** What a mend did besides the wanted option itself; `to` is null where an answer was dropped. */
+export interface Changed {
+  changes: { choice: string; from: string; to: string | null }[];
+}
+
+export interface BuildDesk {
+  current: CurrentCatalogue;
+  /** The query of the build, for links to its other steps. */
+  search: string;
+  build: Build;
+  engraving: string;
+  evaluation: Evaluation;
+  /** Sentences about parts of the address that could not be read. */
+  problems: string[];
+  /** What the last mend changed; null once anything else was done. */
+  changed: Changed | null;
+  choose: (choice: string, option: string) => void;
+  /** Puts a wanted option in together with its mend. */
+  chooseWithMend: (wanted: Wanted, mend: Mend) => void;
+  /** Decimal text; null = not known. */
+  setNumber: (id: string, text: string | null) => void;
+  setNumberWithMend: (id: string, text: string, mend: Mend) => void;
+  setEngraving: (text: string) => void;
+  forgetChanged: () => void;
+  undo: (() => void) | null;
+  redo: (() => void) | null;
+}
+
+const DeskContext = createContext<BuildDesk | null>(null);
+
+/** The build on the bench and all that can be done to it. Only within BuildDeskProvider. */
+export function useBuildDesk(): BuildDesk {
+  const desk = useContext(DeskContext);
+  if (desk === null) throw new Error("the build's parts stand outside of BuildDeskProvider");
+  return desk;
+}
+
+interface BuildDeskProviderProps {
+  current: CurrentCatalogue;
+  children: ReactNode;
+}
+
+/** Holds the build, evaluates it once for each change, and has one message read out for each. */
+export function BuildDeskProvider({ current, children }: BuildDeskProviderProps) {
+  const { catalogue } = current;
+  const held = useHeldBuild();
+  const { search } = held;
+  const read = useMemo(() => searchToBuild(catalogue, new URLSearchParams(search)), [catalogue, search]);
+  const evaluation = useMemo(() => evaluate(current, read.build), [current, read.build]);
+  const [changed, setChanged] = useState<(Changed & { search: string }) | null>(null);
+  const because = useRef("");
+  useOutcome(search, evaluation, because);
+  useProgressNote(search);
+
+  const { build } = read;
+  const engraving = read.engraving ?? "";
+  const put = (next: Build, why: string, mended: Changed["changes"] | null = null) => {
+    const address = searchOf(catalogue, next, engraving, search);
+    because.current = why;
+    setChanged(mended === null ? null : { changes: mended, search: address });
+    held.put(address);
+  };
+  const withNumber = (id: string, text: string | null): Build => {
+    const others = Object.entries(build.numbers).filter(([name]) => name !== id);
+    return { ...build, numbers: Object.fromEntries(text === null ? others : [...others, [id, text]]) };
+  };
+  const mendedWords = (changes: Changed["changes"]) =>
+    changes
+      .map(({ choice, to }) =>
+        to === null
+          ? `${choiceName(catalogue, choice)} dropped.`
+          : `${choiceName(catalogue, choice)} changed to ${optionName(catalogue, choice, to)}.`,
+      )
+      .join(" ");
+
+  const desk: BuildDesk = {
+    current,
+    search,
+    build,
+    engraving,
+    evaluation,
+    problems: read.problems.map(({ message }) => message),
+    changed: changed?.search === search ? changed : null,
+    choose(choice, option) {
+      if (build.answers[choice] === option) return;
+      const answers = { ...build.answers, [choice]: option };
+      put({ ...build, answers: choice === "family" ? onlyOptionsFilled(current, answers) : answers }, "");
+    },
+    chooseWithMend(wanted, mend) {
+      const answers = mended({ ...build.answers, [wanted.choice]: wanted.option }, mend);
+      put({ ...build, answers }, mendedWords(mend.changes), mend.changes);
+    },
+    setNumber(id, text) {
+      if ((build.numbers[id] ?? null) !== text) put(withNumber(id, text), "");
+    },
+    setNumberWithMend(id, text, mend) {
+      const next = withNumber(id, text);
+      put({ ...next, answers: mended(next.answers, mend) }, mendedWords(mend.changes), mend.changes);
+    },
+    setEngraving(text) {
+      held.put(searchOf(catalogue, build, text, search), true);
+    },
+    forgetChanged() {
+      setChanged(null);
+    },
+    undo: told(held.undo, "Undone.", because),
+    redo: told(held.redo, "Done again.", because),
+  };
+  return <DeskContext value={desk}>{children}</DeskContext>;
+}
+
+function told(act: (() => void) | null, word: string, because: { current: string }): (() => void) | null {
+  if (act === null) return null;
+  return () => {
+    because.current = word;
+    act();
+  };
+}
+
+function mended(answers: Build["answers"], mend: Mend): Build["answers"] {
+  const changed = new Map(mend.changes.map(({ choice, to }) => [choice, to]));
+  const kept = Object.entries(answers).filter(([choice]) => !changed.has(choice));
+  const replaced = [...changed].flatMap(([choice, to]) => (to === null ? [] : [[choice, to] as const]));
+  return Object.fromEntries([...kept, ...replaced]);
+}
+
+/** With the family chosen, a choice that has one option in it is no question any more. */
+function onlyOptionsFilled({ catalogue }: CurrentCatalogue, answers: Build["answers"]): Build["answers"] {
+  const filled = { ...answers };
+  for (const { id, options } of catalogue.choices) {
+    const made = options.filter(({ families }) => families?.includes(answers["family"] ?? "") !== false);
+    const [only] = made;
+    if (made.length === 1 && only !== undefined) filled[id] ??= only.id;
+  }
+  return filled;
+}
+
+/** One polite message for each change of the build, from wherever it came. */
+function useOutcome(search: string, evaluation: Evaluation, because: { current: string }): void {
+  const announce = useAnnounce();
+  const said = useRef({ search, evaluation });
+  useEffect(() => {
+    const before = said.current;
+    if (before.search === search) return;
+    said.current = { search, evaluation };
+    if (before.evaluation === evaluation) return;
+    const words = outcomeWords(before.evaluation, evaluation);
+    announce(because.current === "" ? words : `${because.current} ${words}`);
+    because.current = "";
+  }, [announce, because, evaluation, search]);
+}
+
+function useProgressNote(search: string): void {
+  const { pathname } = useLocation();
+  useEffect(() => {
+    if (search !== "") noteBuildInProgress(`${pathname}${search}`);
+  }, [pathname, search]);
+}

@@ -1,0 +1,79 @@
+import type { Choice } from "#shared/catalogue/catalogue.ts";
+import type { ChoiceState } from "#shared/rules/evaluation.ts";
+import { OptionList, type OptionRow } from "#web/components/option-list.tsx";
+import { useBuildDesk } from "./build-desk.tsx";
+import { ClosedReason, MendButton } from "./closed-option.tsx";
+import { optionEffects } from "./option-effects.tsx";
+import { SizeChart } from "./size-chart.tsx";
+
+/** Above so many options a choice is shown as a chart of sizes. */
+const mostRows = 24;
+
+interface ChoiceQuestionProps {
+  choice: Choice;
+  state: ChoiceState;
+}
+
+/** One choice of a step: every option with its effect, closed ones with their reason and mend. */
+export function ChoiceQuestion({ choice, state }: ChoiceQuestionProps) {
+  const { current, choose } = useBuildDesk();
+  if (state.options.length > mostRows) return <SizeChart choice={choice} state={state} />;
+  const chosen = state.options.find((option) => option.chosen)?.option ?? null;
+  const rows = state.options.map((option): OptionRow => {
+    const described = choice.options.find(({ id }) => id === option.option);
+    const effects = optionEffects(current, choice.id, option);
+    const wanted = { choice: choice.id, option: option.option };
+    return {
+      value: option.option,
+      name: described?.name ?? option.option,
+      description: described?.description === "" ? undefined : described?.description,
+      effects: effects.length === 0 ? undefined : <EffectParts parts={effects} />,
+      closed: option.open
+        ? undefined
+        : { reason: <ClosedReason {...wanted} />, mend: <MendButton {...wanted} /> },
+    };
+  });
+  return (
+    <OptionList
+      legend={choice.question}
+      hint={<ChoiceHelp choice={choice} single={state.options.length === 1} />}
+      name={choice.id}
+      options={rows}
+      value={chosen}
+      onChoose={(option) => {
+        choose(choice.id, option);
+      }}
+    />
+  );
+}
+
+function EffectParts({ parts }: { parts: string[] }) {
+  return parts.map((part) => (
+    <span key={part} className="whitespace-nowrap">
+      {part}
+    </span>
+  ));
+}
+
+interface ChoiceHelpProps {
+  choice: Choice;
+  /** The choice has one option in the family. */
+  single: boolean;
+}
+
+/** What it is in one line; when one wants it and what it costs, on demand. */
+export function ChoiceHelp({ choice, single }: ChoiceHelpProps) {
+  const { what, when, cost } = choice.help;
+  return (
+    <>
+      <p>{single ? `One option in this family. ${what}` : what}</p>
+      <details className="text-sm">
+        <summary className="inline-flex min-h-6 cursor-pointer items-center text-dye underline underline-offset-4">
+          When you want it, what it costs you
+        </summary>
+        <p className="mt-1">{when}</p>
+        <p className="mt-1">{cost}</p>
+      </details>
+    </>
+  );
+}

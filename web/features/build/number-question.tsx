@@ -1,0 +1,96 @@
+import { useState } from "react";
+import type { NumberField as Field } from "#shared/catalogue/catalogue.ts";
+import { admitNumber, type Admission } from "#shared/rules/admit-number.ts";
+import { NumberField } from "#web/components/text-field.tsx";
+import { useBuildDesk } from "./build-desk.tsx";
+import { mendWords } from "./build-words.ts";
+import { MendOffer } from "./closed-option.tsx";
+
+const unitNames: Record<Field["unit"], string> = {
+  in: "inches",
+  cc: "cubic centimetres",
+  rpm: "revolutions per minute",
+  hp: "horsepower",
+};
+
+type Refusal = Extract<Admission, { ok: false }> & { text: string };
+
+/**
+ * A number that may be typed or left unknown. One that would leave nothing open is treated as a closed option:
+ * the reason and the mend are shown, what was typed stays in the box, and the build stays as it was.
+ */
+export function NumberQuestion({ field }: { field: Field }) {
+  const { current, build, evaluation, setNumber, setNumberWithMend } = useBuildDesk();
+  const known = build.numbers[field.id] ?? "";
+  const [draft, setDraft] = useState<string | null>(null);
+  const [refused, setRefused] = useState<(Refusal & { at: typeof evaluation }) | null>(null);
+
+  /** Whether what is typed stands in the build now. */
+  const settle = (): boolean => {
+    if (draft === null) return refused === null;
+    const text = draft.replaceAll(/[\s,_]/g, "");
+    if (text === known) {
+      setDraft(null);
+      setRefused(null);
+      return true;
+    }
+    const value = text === "" ? null : text;
+    const admission = admitNumber(current, build, field.id, value);
+    if (!admission.ok) {
+      setRefused({ ...admission, text, at: evaluation });
+      return false;
+    }
+    setNumber(field.id, value === null ? null : plain(value));
+    setDraft(null);
+    setRefused(null);
+    return true;
+  };
+
+  // After another change the refusal may not hold any more: it is asked again when the box is left or Enter pressed.
+  const standing = refused?.at === evaluation ? refused : null;
+  const offer = standing?.mend ?? null;
+  return (
+    <div className="max-w-text">
+      <NumberField
+        name={field.id}
+        label={field.name}
+        hint={field.hint === "" ? undefined : field.hint}
+        error={standing?.reason.sentence}
+        optional
+        unit={field.unit}
+        unitName={unitNames[field.unit]}
+        inputMode={Number.isInteger(field.step) ? "numeric" : "decimal"}
+        value={draft ?? known}
+        onChange={(event) => {
+          setDraft(event.target.value);
+        }}
+        onBlur={settle}
+        onKeyDown={(event) => {
+          if (event.key === "Enter" && !settle()) event.preventDefault();
+        }}
+      />
+      {standing !== null && offer !== null && (
+        <div className="mt-2">
+          <MendOffer
+            words={mendWords(current.catalogue, offer)}
+            onTake={() => {
+              setDraft(null);
+              setRefused(null);
+              setNumberWithMend(field.id, plain(standing.text), offer);
+            }}
+          />
+        </div>
+      )}
+      {standing === null && known === "" && draft === null && (
+        <p className="mt-1 text-sm text-iron">Not known yet. What depends on it is marked to be confirmed.</p>
+      )}
+    </div>
+  );
+}
+
+/** "0450" and "450." as "450": plain decimal text as an address carries it. */
+function plain(text: string): string {
+  const [whole = "", fraction = ""] = text.replace(/^\+/, "").split(".");
+  const digits = whole.replace(/^(-?)0+(?=\d)/, "$1");
+  return fraction === "" ? digits : `${digits === "" ? "0" : digits}.${fraction}`;
+}

@@ -1,0 +1,76 @@
+import type { SubmitEvent } from "react";
+import { useNavigate } from "react-router-dom";
+import type { Step } from "#shared/catalogue/catalogue.ts";
+import { Button } from "#web/components/button.tsx";
+import { CautionLine } from "#web/components/caution-line.tsx";
+import { Notice } from "#web/components/notice.tsx";
+import { PageHeading } from "#web/components/page-heading.tsx";
+import { stepPath } from "./build-address.ts";
+import { useBuildDesk } from "./build-desk.tsx";
+import { BuildSheet } from "./build-sheet.tsx";
+import { ChoiceQuestion } from "./choice-question.tsx";
+import { NumberQuestion } from "./number-question.tsx";
+import { reviewStep } from "./step-list.tsx";
+import { UndoButtons } from "./undo-buttons.tsx";
+
+/** One step of the form. Enter goes on to the next; nothing has to be answered before. */
+export function StepForm({ step }: { step: Step }) {
+  const { current, evaluation, build, problems, search } = useBuildDesk();
+  const navigate = useNavigate();
+  const { catalogue } = current;
+  const position = catalogue.steps.indexOf(step);
+  const next = catalogue.steps[position + 1];
+  const goOn = (event: SubmitEvent) => {
+    event.preventDefault();
+    void navigate({ pathname: stepPath(next?.id ?? reviewStep), search });
+  };
+  const numbers = catalogue.numbers.filter(
+    ({ id, onlyWith }) =>
+      step.numbers.includes(id) &&
+      (onlyWith === undefined || build.answers[onlyWith.choice] === onlyWith.option),
+  );
+  return (
+    <form onSubmit={goOn} noValidate className="[&_input]:scroll-my-28">
+      <div className="mb-6">
+        <PageHeading
+          title={step.name}
+          over={`Step ${position + 1} of ${catalogue.steps.length + 1}`}
+          lead={step.intro}
+          actions={<UndoButtons />}
+        />
+      </div>
+      <BuildSheet
+        here={step.id}
+        action={
+          <Button type="submit" look="main" className="shrink-0 xl:min-w-44 xl:text-lg">
+            <span className="xl:hidden">Next</span>
+            <span className="hidden xl:inline">Next: {next?.name ?? "Review"}</span>
+          </Button>
+        }
+      >
+        <div className="space-y-10">
+          {problems.length > 0 && (
+            <Notice kind="caution" title="Part of the address could not be read and was left out">
+              {problems.join(" ")}
+            </Notice>
+          )}
+          {step.caution !== undefined && <CautionLine>{step.caution}</CautionLine>}
+          {build.answers["family"] === undefined && !step.choices.includes("family") && (
+            <p className="text-sm text-iron">
+              No family is chosen yet, so prices, days and weights are not known.
+            </p>
+          )}
+          {step.choices.map((id) => {
+            const choice = catalogue.choices.find((candidate) => candidate.id === id);
+            const state = evaluation.choices.find((candidate) => candidate.choice === id);
+            if (choice === undefined || state === undefined) return null;
+            return <ChoiceQuestion key={id} choice={choice} state={state} />;
+          })}
+          {numbers.map((field) => (
+            <NumberQuestion key={field.id} field={field} />
+          ))}
+        </div>
+      </BuildSheet>
+    </form>
+  );
+}
