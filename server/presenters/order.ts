@@ -4,6 +4,7 @@ import { OPEN_FOR } from "#server/services/orders/open-order.ts";
 import type { OrderRecord } from "#server/services/orders/read-order.ts";
 import type { Delivery } from "#shared/contracts/address.ts";
 import type { MyOrders, OrderReview, OrderSummary, OrderView } from "#shared/contracts/orders.ts";
+import { priceOrder } from "#shared/pricing/price-order.ts";
 import type { OrderState } from "#shared/orders/order-state.ts";
 
 /** An order as its buyer sees it: no names of staff. */
@@ -109,27 +110,16 @@ function deliveryOf(order: Order): Delivery {
 }
 
 function totalsOf({ order, lines }: OrderRecord): OrderView["totals"] {
-  const freightLabel =
-    order.deliveryAddress === null
-      ? "Pick-up at the shop"
-      : `Freight to ${order.deliveryAddress.state} ${order.deliveryAddress.postalCode.slice(0, 5)}`;
-  return {
-    currency: order.currency,
-    lines: [
-      ...lines.map((line) => ({
-        kind: "block" as const,
-        label: line.build.summary,
-        quantity: line.quantity,
-        amountCents: line.totalCents,
-      })),
-      { kind: "freight", label: freightLabel, quantity: 1, amountCents: order.freightCents },
-      { kind: "tax", label: order.taxLabel, quantity: 1, amountCents: order.taxCents },
-    ],
-    goodsCents: order.goodsCents,
+  return priceOrder({
+    lines: lines.map((line) => ({
+      label: line.build.summary,
+      quantity: line.quantity,
+      unitCents: line.unitCents,
+    })),
+    delivery: deliveryOf(order),
     freightCents: order.freightCents,
-    taxCents: order.taxCents,
-    totalCents: order.totalCents,
-  };
+    tax: { label: order.taxLabel, cents: order.taxCents },
+  });
 }
 
 const nextSteps: Record<OrderState, string> = {

@@ -8,7 +8,9 @@ import type { CartHolder } from "#server/services/cart/find-cart.ts";
 import type { Address, Delivery } from "#shared/contracts/address.ts";
 import type { CartView } from "#shared/contracts/cart.ts";
 import type { Totals } from "#shared/contracts/checkout.ts";
-import { freightCents } from "#shared/freight/freight.ts";
+import { quoteFreight } from "#shared/freight/freight.ts";
+import { priceOrder } from "#shared/pricing/price-order.ts";
+import type { PriceList } from "#shared/pricing/price-list.ts";
 import { estimateOrderShipDate } from "#shared/scheduling/estimate-order.ts";
 
 /** A cart with all that it costs, delivered, and who said what the tax is. */
@@ -37,8 +39,7 @@ export async function totalCart(holder: CartHolder, delivery: Delivery): Promise
   }
   if (cart.lines.length === 0) throw new Refusal("conflict", "The cart is empty.");
   const { catalogue, priceList, load, today } = await currentContext();
-  const freight =
-    delivery.method === "freight" ? freightCents(priceList, delivery.address.postalCode, cart.blocks) : 0;
+  const freight = freightOf(priceList, delivery, cart.blocks);
   const address = delivery.method === "freight" ? delivery.address : await shopAddress();
   const lines = cart.lines.map((line) => ({ reference: line.id, amountCents: line.totalCents }));
   const tax = await paymentGateway.askTax({
@@ -50,7 +51,16 @@ export async function totalCart(holder: CartHolder, delivery: Delivery): Promise
   });
   return {
     cart,
-    totals: totalsOf(cart, delivery, freight, tax),
+    totals: priceOrder({
+      lines: cart.lines.map(({ build, quantity }) => ({
+        label: build.summary,
+        quantity,
+        unitCents: build.priceCents,
+      })),
+      delivery,
+      freightCents: freight,
+      tax: { label: tax.rateLabel, cents: tax.taxCents },
+    }),
     taxLabel: tax.rateLabel,
     taxCalculation: tax.calculationId,
     catalogueVersion: catalogue.version,
@@ -71,34 +81,15 @@ async function shopAddress(): Promise<Address> {
   return (await shopSettings()).address;
 }
 
-function totalsOf(
-  cart: CartView,
-  delivery: Delivery,
-  freight: number,
-  tax: { taxCents: number; rateLabel: string },
-): Totals {
-  const blocks = cart.lines.map((line) => ({
-    kind: "block" as const,
-    label: line.build.summary,
-    quantity: line.quantity,
-    amountCents: line.totalCents,
-  }));
-  const freightLabel =
-    delivery.method === "freight"
-      ? `Freight to ${delivery.address.state} ${delivery.address.postalCode.slice(0, 5)}`
-      : "Pick-up at the shop";
-  return {
-    currency: "USD",
-    lines: [
-      ...blocks,
-      { kind: "freight", label: freightLabel, quantity: 1, amountCents: freight },
-      { kind: "tax", label: tax.rateLabel, quantity: 1, amountCents: tax.taxCents },
-    ],
-    goodsCents: cart.totalCents,
-    freightCents: freight,
-    taxCents: tax.taxCents,
-    totalCents: cart.totalCents + freight + tax.taxCents,
-  };
+/** @throws Refusal validation, with a path, where no rate is known */
+function freightOf(priceList: PriceList, delivery: Delivery, blocks: number): number {
+  if (delivery.method === "pick-up") return 0;
+  const quote = quoteFreight(priceList, delivery.address.postalCode, blocks);
+  if (!quote.ok) {
+    const errors = [{ path: "delivery.address.postalCode", message: quote.message }];
+    throw new Refusal("validation", "There is no freight to this address.", { errors });
+  }
+  return quote.cents;
 }
 
 /** A short fingerprint of plain data. */
