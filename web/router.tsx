@@ -17,7 +17,13 @@ import { PlaceError, RouteError } from "./routes/route-error.tsx";
  * The file exports `Component` and, where the fetch can start before the page is drawn, `loader`.
  */
 
-const counterPages: RouteObject[] = [];
+const counterPages: RouteObject[] = [
+  { path: "/cart", lazy: () => import("./routes/counter/cart.tsx") },
+  { path: "/checkout", lazy: () => import("./routes/counter/checkout.tsx") },
+  { path: "/checkout/return", lazy: () => import("./routes/counter/checkout-return.tsx") },
+  { path: "/orders/link-ended", lazy: () => import("./routes/counter/order-link-ended.tsx") },
+  { path: "/orders/:number", lazy: () => import("./routes/counter/order.tsx") },
+];
 
 /** Signing in and its kin: open to anyone. */
 const signInPages: RouteObject[] = [];
@@ -25,7 +31,7 @@ const signInPages: RouteObject[] = [];
 /** What is one's own: only signed in. */
 const ownPages: RouteObject[] = [];
 
-const floorPages: RouteObject[] = [];
+const floorPages: RouteObject[] = [{ path: "/floor", lazy: () => import("./routes/floor/orders.tsx") }];
 
 const officePages: RouteObject[] = [];
 
