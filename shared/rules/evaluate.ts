@@ -33,6 +33,7 @@ export function evaluate(context: EvaluationContext, build: Build): Evaluation {
     weight: totals?.weight ?? null,
     shipsOn: totals?.shipsOn ?? null,
     minutes: totals?.minutes ?? {},
+    leadDays: totals?.leadDays ?? 0,
     unanswered,
     orderable: unanswered.length === 0 && findings.every(({ severity }) => severity !== "stop"),
   };

@@ -97,7 +97,10 @@ export interface Evaluation {
   weight: number | null;
   /** Estimated ship date, ISO; null without a family. */
   shipsOn: string | null;
+  /** Of one block; empty without a family. */
   minutes: Partial<Record<WorkCentre, number>>;
+  /** Longest lead of the family and its options, calendar days; 0 without a family. */
+  leadDays: number;
   /** Choices without an answer, in step order. */
   unanswered: string[];
   /** Complete and free of stops: it may be ordered. */

@@ -17,8 +17,8 @@ interface State {
 
 /**
  * A full assignment of one family that extends the answers given and breaks no stop rule, or null if there is none.
- * Depth-first with forward checking: a rule is asked as soon as at most one of its choices is undecided; the choice with the
- * fewest options left goes first. Complete: null means that none exists.
+ * Depth-first with forward checking: a rule is asked as soon as at most one of its choices is undecided. Choices that no rule
+ * joins are decided apart. Complete: null means that none exists.
  */
 export function findExtension(
   compiled: CompiledCatalogue,
@@ -59,7 +59,8 @@ export function findExtension(
     if (constraint.scope.length === 0 && wishes.without?.[constraint.stop] !== 1 && !constraint.allows(0))
       return null;
   }
-  return propagate(search, decided) && descend(search) ? state.values : null;
+  const every = choices.map((_, choice) => choice);
+  return propagate(search, decided) && decideAll(search, every) ? state.values : null;
 }
 
 interface Search {
@@ -138,23 +139,38 @@ function undo(state: State, length: number): void {
   }
 }
 
-function smallestUndecided(state: State): number {
-  let best = -1;
-  let least = Number.POSITIVE_INFINITY;
-  for (let choice = 0; choice < state.sizes.length; choice += 1) {
-    const size = state.sizes[choice] ?? 0;
-    if (size > 1 && size < least) {
-      best = choice;
-      least = size;
-    }
+/**
+ * Decides the given choices. They fall into groups that no rule joins any more; each group is decided by itself, and if one cannot
+ * be, no other answer elsewhere would help.
+ */
+function decideAll(search: Search, among: readonly number[]): boolean {
+  for (const choice of among) {
+    if (search.state.sizes[choice] !== 1 && !decideGroup(search, groupOf(search, choice))) return false;
   }
-  return best;
+  return true;
 }
 
-function descend(search: Search): boolean {
+/** The undecided choices that rules join, directly or through each other, with this one. */
+function groupOf(search: Search, first: number): number[] {
+  const { problem, state, wishes } = search;
+  const group = [first];
+  for (let next = 0; next < group.length; next += 1) {
+    for (const constraint of problem.constraintsOf[group[next] ?? first] ?? []) {
+      if (wishes.without?.[constraint.stop] === 1) continue;
+      for (const other of constraint.scope) {
+        if (state.sizes[other] !== 1 && !group.includes(other)) group.push(other);
+      }
+    }
+  }
+  return group;
+}
+
+/** Decides one group: the choice with the fewest options left first, options without a witness before the others. */
+function decideGroup(search: Search, group: readonly number[]): boolean {
   const { state, compiled, wishes } = search;
-  const choice = smallestUndecided(state);
-  if (choice < 0) return true;
+  const choice = group.reduce((best, other) =>
+    (state.sizes[other] ?? 0) < (state.sizes[best] ?? 0) ? other : best,
+  );
   const from = compiled.offsets[choice] ?? 0;
   const to = compiled.offsets[choice + 1] ?? from;
   const candidates: number[] = [];
@@ -167,7 +183,7 @@ function descend(search: Search): boolean {
     const mark = state.trail.length;
     for (const other of candidates) if (other !== at) remove(state, choice, other);
     state.values[choice] = at - from;
-    if (propagate(search, [choice]) && descend(search)) return true;
+    if (propagate(search, [choice]) && decideAll(search, group)) return true;
     undo(state, mark);
   }
   return false;

@@ -1,6 +1,4 @@
-import type { Build } from "../catalogue/build.ts";
-import { workOf } from "../catalogue/build-work.ts";
-import { workCentreSchema, type Catalogue, type WorkCentre } from "../catalogue/catalogue.ts";
+import { workCentreSchema, type WorkCentre } from "../catalogue/catalogue.ts";
 import { formatDay, isHoliday, parseDay, weekday } from "./calendar.ts";
 
 /** Minutes of accepted work ahead at each work centre; absent = none. */
@@ -67,36 +65,6 @@ export function estimateShipDate(input: EstimateInput): string {
   }
   const finished = dayAfterWork(parseDay(input.today), elapsed, calendar);
   return formatDay(nextWorkingDay(finished + leadDays, calendar));
-}
-
-/**
- * Ship date of a whole order, ISO: its lines pass one behind the other, each behind the accepted work, and the latest line counts.
- * Throws RangeError as `estimateShipDate` does, and on an order without lines.
- */
-export function estimateOrderShipDate(input: {
-  catalogue: Catalogue;
-  lines: readonly { build: Build; quantity: number }[];
-  load: Load;
-  today: string;
-}): string {
-  const ahead = { ...input.load.minutes };
-  const dates = input.lines.map(({ build, quantity }) => {
-    const { minutes, leadDays } = workOf(input.catalogue, build.answers);
-    const date = estimateShipDate({
-      minutes,
-      load: { minutes: ahead },
-      today: input.today,
-      leadDays,
-      quantity,
-    });
-    for (const centre of workCentreSchema.options) {
-      ahead[centre] = (ahead[centre] ?? 0) + (minutes[centre] ?? 0) * quantity;
-    }
-    return date;
-  });
-  const latest = dates.sort().at(-1);
-  if (latest === undefined) throw new RangeError("an order without lines has no ship date");
-  return latest;
 }
 
 function requireWhole(figure: number, least: number, what: string): void {
