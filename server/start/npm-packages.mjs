@@ -45,7 +45,7 @@ export async function stateOfPackages(folder = checkout) {
 const causes = [
   [/ENOSPC/, "the disk is full"],
   [
-    /ENOTFOUND|EAI_AGAIN|ECONNREFUSED|ECONNRESET|ETIMEDOUT|ENETUNREACH|ERR_SOCKET_TIMEOUT|network/i,
+    /ENOTFOUND|EAI_AGAIN|ECONNREFUSED|ECONNRESET|ETIMEDOUT|ENETUNREACH|ERR_SOCKET_TIMEOUT/i,
     "the package registry cannot be reached",
   ],
   [/EACCES|EPERM/, "this user may not write the checkout"],
@@ -59,7 +59,10 @@ function causeOf(output) {
   return line?.slice("npm error ".length) ?? "npm gave no reason";
 }
 
-/** Installs what the lock file asks for when it is missing or stale; NODE_ENV=production leaves nothing out. */
+/**
+ * Installs what the lock file asks for when it is missing or stale; NODE_ENV=production leaves nothing out. No
+ * package runs a script: those that have one bring their programs ready made, and a bare machine has no compiler.
+ */
 export async function ensurePackages() {
   await withLock(`packages ${checkout}`, async () => {
     const { state, hash } = await stateOfPackages();
@@ -70,7 +73,7 @@ export async function ensurePackages() {
         ...process.env,
         PATH: `${dirname(process.execPath)}${delimiter}${process.env.PATH ?? ""}`,
       };
-      const args = ["ci", "--include=dev", "--no-audit", "--no-fund", "--loglevel=error"];
+      const args = ["ci", "--include=dev", "--ignore-scripts", "--no-audit", "--no-fund", "--loglevel=error"];
       const { code, stderr } = await runProgram("npm", args, { cwd: checkout, env });
       if (code !== 0) throw new StartFailure(`The npm packages could not be installed: ${causeOf(stderr)}.`);
     }
