@@ -18,6 +18,14 @@ import { PlaceError, RouteError } from "./routes/route-error.tsx";
  */
 
 const counterPages: RouteObject[] = [
+  {
+    path: "/build",
+    lazy: () => import("./routes/counter/build.tsx"),
+    children: [
+      { index: true, lazy: () => import("./routes/counter/build-start.tsx") },
+      { path: ":step", lazy: () => import("./routes/counter/build-step.tsx") },
+    ],
+  },
   { path: "/cart", lazy: () => import("./routes/counter/cart.tsx") },
   { path: "/checkout", lazy: () => import("./routes/counter/checkout.tsx") },
   { path: "/checkout/return", lazy: () => import("./routes/counter/checkout-return.tsx") },
@@ -31,7 +39,10 @@ const signInPages: RouteObject[] = [];
 /** What is one's own: only signed in. */
 const ownPages: RouteObject[] = [];
 
-const floorPages: RouteObject[] = [{ path: "/floor", lazy: () => import("./routes/floor/orders.tsx") }];
+const floorPages: RouteObject[] = [
+  { path: "/floor", lazy: () => import("./routes/floor/queue.tsx") },
+  { path: "/floor/orders/:number", lazy: () => import("./routes/floor/order.tsx") },
+];
 
 const officePages: RouteObject[] = [];
 
