@@ -40,7 +40,7 @@ const signInPages: RouteObject[] = [];
 const ownPages: RouteObject[] = [];
 
 const floorPages: RouteObject[] = [
-  { path: "/floor", lazy: () => import("./routes/floor/queue.tsx") },
+  { path: "/floor", lazy: () => import("./routes/floor/orders.tsx") },
   { path: "/floor/orders/:number", lazy: () => import("./routes/floor/order.tsx") },
 ];
 
