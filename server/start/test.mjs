@@ -1,4 +1,5 @@
 import { spawn } from "node:child_process";
+import { existsSync } from "node:fs";
 import { mkdtemp, rm } from "node:fs/promises";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
@@ -15,7 +16,7 @@ const withoutBrowser = /^(\.\/)?tests\/(shared|reference|web|server|faults|fake-
 
 /** Paths that name only tests without a browser need neither Chromium nor the built client. */
 function needsBrowser(args) {
-  const paths = args.filter((arg) => !arg.startsWith("-"));
+  const paths = args.filter((arg) => existsSync(join(checkout, arg)));
   return paths.length === 0 || !paths.every((path) => withoutBrowser.test(path));
 }
 

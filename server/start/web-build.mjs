@@ -25,6 +25,13 @@ async function builtHash() {
   });
 }
 
+/** The first line that names a fault, below the lines that only say that there is one. */
+function causeOf(report) {
+  const lines = report.split("\n").map((line) => line.trim());
+  const told = lines.slice(lines.findIndex((line) => /error during build/i.test(line)) + 1);
+  return told.find((line) => line !== "" && !/^Build failed with/.test(line)) ?? "Vite gave no reason";
+}
+
 /** Builds the client into dist/ when anything that it is made of changed since the last build. */
 export async function ensureWebBuild() {
   await withLock(`web build ${checkout}`, async () => {
@@ -32,7 +39,7 @@ export async function ensureWebBuild() {
     if ((await builtHash()) === hash) return;
     say("Building the client ...");
     const program = join(checkout, "node_modules", "vite", "bin", "vite.js");
-    const env = { ...process.env, NODE_ENV: "production" };
+    const env = { ...process.env, NODE_ENV: "production", NO_COLOR: "1" };
     const { code, stdout, stderr } = await runProgram(process.execPath, [program, "build"], {
       cwd: checkout,
       env,
@@ -41,9 +48,8 @@ export async function ensureWebBuild() {
       const report = join(checkout, ".data", "web-build.log");
       await mkdir(dirname(report), { recursive: true });
       await writeFile(report, `${stdout}\n${stderr}`);
-      const line = stderr.split("\n").find((text) => /error/i.test(text)) ?? "Vite gave no reason";
       throw new StartFailure(
-        `The client could not be built: ${line.trim()} (the whole report is in ${report})`,
+        `The client could not be built: ${causeOf(stderr)} (the whole report is in ${report})`,
       );
     }
     await writeFile(mark, hash);

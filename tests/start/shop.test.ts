@@ -115,6 +115,6 @@ describe("npm start", () => {
     const broken = await run(["server/start/web-build.mjs"], { folder });
     expect(broken.code).toBe(1);
     expect(broken.stderr.trim().split("\n")).toHaveLength(1);
-    expect(broken.stderr).toContain("The client could not be built: ");
+    expect(broken.stderr).toContain("Could not resolve './missing.ts' in web/main.ts");
   });
 });
