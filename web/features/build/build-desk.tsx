@@ -62,15 +62,15 @@ export function BuildDeskProvider({ current, children }: BuildDeskProviderProps)
   const read = useMemo(() => searchToBuild(catalogue, new URLSearchParams(search)), [catalogue, search]);
   const evaluation = useMemo(() => evaluate(current, read.build), [current, read.build]);
   const [changed, setChanged] = useState<(Changed & { search: string }) | null>(null);
-  const because = useRef("");
-  useOutcome(search, evaluation, because);
+  const [why, setWhy] = useState<Why | null>(null);
+  useOutcome(search, evaluation, why);
   useProgressNote(search);
 
   const { build } = read;
   const engraving = read.engraving ?? "";
-  const put = (next: Build, why: string, mended: Changed["changes"] | null = null) => {
+  const put = (next: Build, words: string, mended: Changed["changes"] | null = null) => {
     const address = searchOf(catalogue, next, engraving, search);
-    because.current = why;
+    setWhy({ from: search, words });
     setChanged(mended === null ? null : { changes: mended, search: address });
     held.put(address);
   };
@@ -78,6 +78,13 @@ export function BuildDeskProvider({ current, children }: BuildDeskProviderProps)
     const others = Object.entries(build.numbers).filter(([name]) => name !== id);
     return { ...build, numbers: Object.fromEntries(text === null ? others : [...others, [id, text]]) };
   };
+  const told = (act: (() => void) | null, words: string) =>
+    act === null
+      ? null
+      : () => {
+          setWhy({ from: search, words });
+          act();
+        };
   const mendedWords = (changes: Changed["changes"]) =>
     changes
       .map(({ choice, to }) =>
@@ -112,23 +119,16 @@ export function BuildDeskProvider({ current, children }: BuildDeskProviderProps)
       put({ ...next, answers: mended(next.answers, mend) }, mendedWords(mend.changes), mend.changes);
     },
     setEngraving(text) {
+      setWhy(null);
       held.put(searchOf(catalogue, build, text, search), true);
     },
     forgetChanged() {
       setChanged(null);
     },
-    undo: told(held.undo, "Undone.", because),
-    redo: told(held.redo, "Done again.", because),
+    undo: told(held.undo, "Undone."),
+    redo: told(held.redo, "Done again."),
   };
   return <DeskContext value={desk}>{children}</DeskContext>;
-}
-
-function told(act: (() => void) | null, word: string, because: { current: string }): (() => void) | null {
-  if (act === null) return null;
-  return () => {
-    because.current = word;
-    act();
-  };
 }
 
 function mended(answers: Build["answers"], mend: Mend): Build["answers"] {
@@ -149,19 +149,23 @@ function onlyOptionsFilled({ catalogue }: CurrentCatalogue, answers: Build["answ
   return filled;
 }
 
-/** One polite message for each change of the build, from wherever it came. */
-function useOutcome(search: string, evaluation: Evaluation, because: { current: string }): void {
+/** What is to be said of the change that is being made, and of which build it was made. */
+interface Why {
+  from: string;
+  words: string;
+}
+
+/** One polite message for each change that was made here; an engraving, or a link to another build, says nothing. */
+function useOutcome(search: string, evaluation: Evaluation, why: Why | null): void {
   const announce = useAnnounce();
   const said = useRef({ search, evaluation });
   useEffect(() => {
     const before = said.current;
     if (before.search === search) return;
     said.current = { search, evaluation };
-    if (before.evaluation === evaluation) return;
-    const words = outcomeWords(before.evaluation, evaluation);
-    announce(because.current === "" ? words : `${because.current} ${words}`);
-    because.current = "";
-  }, [announce, because, evaluation, search]);
+    if (why?.from !== before.search) return;
+    announce(`${why.words} ${outcomeWords(before.evaluation, evaluation)}`.trim());
+  }, [announce, evaluation, search, why]);
 }
 
 function useProgressNote(search: string): void {

@@ -13,14 +13,14 @@ import { mendWords } from "./build-words.ts";
  */
 
 interface Settled {
-  current: CurrentCatalogue;
+  context: CurrentCatalogue;
   evaluation: Evaluation;
 }
 
 /** The build as it stood when there was last time to think about it; null at first. */
 function useSettled(): Settled | null {
   const { current, evaluation } = useBuildDesk();
-  const now = useMemo(() => ({ current, evaluation }), [current, evaluation]);
+  const now = useMemo(() => ({ context: current, evaluation }), [current, evaluation]);
   return useDeferredValue(now, null);
 }
 
@@ -34,7 +34,7 @@ export function ClosedReason({ choice, option }: Wanted) {
   const settled = useSettled();
   const sentence = useMemo(() => {
     if (settled === null || !isClosed(settled, { choice, option })) return null;
-    return explain(settled.current, settled.evaluation.build, { choice, option }).sentence;
+    return explain(settled.context, settled.evaluation.build, { choice, option }).sentence;
   }, [settled, choice, option]);
   return sentence ?? "\u00a0";
 }
@@ -44,7 +44,7 @@ export function MendButton({ choice, option }: Wanted) {
   const { current, chooseWithMend } = useBuildDesk();
   const settled = useSettled();
   const found = useMemo(
-    () => (settled === null ? null : mend(settled.current, settled.evaluation.build, { choice, option })),
+    () => (settled === null ? null : mend(settled.context, settled.evaluation.build, { choice, option })),
     [settled, choice, option],
   );
   if (settled === null) return <span className="block min-h-target" />;

@@ -1,5 +1,5 @@
 import { useEffect, useState } from "react";
-import { useLocation, useNavigate, useNavigationType } from "react-router-dom";
+import { NavigationType, useLocation, useNavigate, useNavigationType } from "react-router-dom";
 import { sameSearch } from "./build-address.ts";
 import { readVisit, writeVisit } from "./visit-store.ts";
 
@@ -67,7 +67,9 @@ export function useHeldBuild(): HeldBuild {
 
   if (held.entry !== location.key) {
     const other =
-      navigation !== "POP" && !isMirror(location.state) && !sameSearch(location.search, held.search);
+      navigation !== NavigationType.Pop &&
+      !isMirror(location.state) &&
+      !sameSearch(location.search, held.search);
     setHeld({
       ...(other ? advanced(held, location.search) : held),
       entry: location.key,

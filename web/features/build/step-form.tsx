@@ -64,7 +64,11 @@ export function StepForm({ step }: { step: Step }) {
             const choice = catalogue.choices.find((candidate) => candidate.id === id);
             const state = evaluation.choices.find((candidate) => candidate.choice === id);
             if (choice === undefined || state === undefined) return null;
-            return <ChoiceQuestion key={id} choice={choice} state={state} />;
+            return (
+              <div key={id} id={id} className="scroll-mt-4">
+                <ChoiceQuestion choice={choice} state={state} />
+              </div>
+            );
           })}
           {numbers.map((field) => (
             <NumberQuestion key={field.id} field={field} />
