@@ -67,7 +67,7 @@ function ShopName({ session, place, home }: Pick<SiteHeaderProps, "session" | "p
         <path d="M16 2v28M3 21h26" stroke="var(--dye)" strokeWidth="1" strokeDasharray="6 2 1 2" />
       </svg>
       <span className="min-w-0 truncate">
-        {session?.shop.name ?? "\u00a0"}
+        {session?.shop.name ?? <span className="sr-only">Home</span>}
         {place !== null && <span className="text-iron"> / {place}</span>}
       </span>
     </Link>

@@ -46,7 +46,7 @@ export function problemWords(error: unknown): ProblemWords {
     return {
       title: "The shop's server could not be reached",
       detail: "Check the connection and try again.",
-      safe: "Nothing you typed is lost, and nothing was sent twice.",
+      safe: "Nothing you typed is lost.",
       again: true,
     };
   }
