@@ -18,11 +18,15 @@ import { PlaceError, RouteError } from "./routes/route-error.tsx";
  */
 
 const counterPages: RouteObject[] = [
+  { path: "/", lazy: () => import("./routes/counter/home.tsx") },
+  { path: "/families", lazy: () => import("./routes/counter/families.tsx") },
+  { path: "/families/:family", lazy: () => import("./routes/counter/family.tsx") },
   {
     path: "/build",
     lazy: () => import("./routes/counter/build.tsx"),
     children: [
       { index: true, lazy: () => import("./routes/counter/build-start.tsx") },
+      { path: "review", lazy: () => import("./routes/counter/review.tsx") },
       { path: ":step", lazy: () => import("./routes/counter/build-step.tsx") },
     ],
   },
@@ -34,17 +38,30 @@ const counterPages: RouteObject[] = [
 ];
 
 /** Signing in and its kin: open to anyone. */
-const signInPages: RouteObject[] = [];
+const signInPages: RouteObject[] = [
+  { path: "/account/sign-in", lazy: () => import("./routes/account/sign-in.tsx") },
+  { path: "/account/register", lazy: () => import("./routes/account/register.tsx") },
+  { path: "/account/verify", lazy: () => import("./routes/account/verify.tsx") },
+  { path: "/account/forgot", lazy: () => import("./routes/account/forgot.tsx") },
+  { path: "/account/reset", lazy: () => import("./routes/account/reset.tsx") },
+];
 
 /** What is one's own: only signed in. */
-const ownPages: RouteObject[] = [];
+const ownPages: RouteObject[] = [
+  { path: "/account", lazy: () => import("./routes/account/account.tsx") },
+  { path: "/account/orders", lazy: () => import("./routes/account/orders.tsx") },
+];
 
 const floorPages: RouteObject[] = [
   { path: "/floor", lazy: () => import("./routes/floor/orders.tsx") },
   { path: "/floor/orders/:number", lazy: () => import("./routes/floor/order.tsx") },
 ];
 
-const officePages: RouteObject[] = [];
+const officePages: RouteObject[] = [
+  { path: "/office", lazy: () => import("./routes/office/office.tsx") },
+  { path: "/office/messages", lazy: () => import("./routes/office/messages.tsx") },
+  { path: "/office/messages/:id", lazy: () => import("./routes/office/message.tsx") },
+];
 
 /**
  * Sends strangers to sign in and back, and tells others that the door is closed to them.
