@@ -6,14 +6,14 @@ import { classNames } from "./class-names.ts";
 type Look = "main" | "secondary" | "quiet" | "danger";
 
 const base =
-  "inline-flex min-h-target items-center justify-center gap-2 rounded px-4 py-2 font-semibold leading-tight no-underline " +
+  "inline-flex min-h-target items-center justify-center gap-2 rounded py-2 font-semibold leading-tight no-underline " +
   "transition-colors aria-disabled:cursor-not-allowed in-data-[place=floor]:min-h-target-floor";
 
 const looks: Record<Look, string> = {
-  main: "bg-pour text-on-pour hover:bg-pour-deep",
-  secondary: "border border-edge bg-sheet text-ink hover:border-ink hover:bg-wash",
-  quiet: "text-dye underline decoration-1 underline-offset-4 hover:bg-dye-wash",
-  danger: "bg-stop text-on-stop hover:bg-stop-deep",
+  main: "px-4 bg-pour text-on-pour hover:bg-pour-deep",
+  secondary: "px-4 border border-edge bg-sheet text-ink hover:border-ink hover:bg-wash",
+  quiet: "px-2 text-left text-dye underline decoration-1 underline-offset-4 hover:bg-dye-wash",
+  danger: "px-4 bg-stop text-on-stop hover:bg-stop-deep",
 };
 
 interface ButtonProps extends Omit<ComponentProps<"button">, "disabled"> {
