@@ -105,7 +105,8 @@ async function openShop({
   const cluster = await startDatabase(databaseFolder, ports.database, secrets.databasePassword);
   await supervision.watch("database", cluster.pid, cluster.log);
   const server = behindAnother ? { host: "127.0.0.1", port: ports.server } : { host, port };
-  const webhookUrl = `http://${behindAnother ? server.host : reachable}:${server.port}${webhookPath}`;
+  const serverOrigin = `http://${behindAnother ? server.host : reachable}:${server.port}`;
+  const webhookUrl = `${serverOrigin}${webhookPath}`;
   const fakes = await startFakes(supervision, { dataFolder, ports, secrets, webhookUrl });
   await serve({
     supervision,
@@ -113,7 +114,8 @@ async function openShop({
     host,
     port,
   });
-  await supervision.until("server", () => isReady(`http://${reachable}:${port}`));
+  await supervision.until("server", () => isReady(serverOrigin));
+  if (behindAnother) await supervision.until("client", () => isReady(`http://${reachable}:${port}`));
   announce(origin, fakes.mailboxUrl);
 }
 

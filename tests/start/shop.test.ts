@@ -80,6 +80,33 @@ describe("npm start", () => {
     expect(processes.filter(lives)).toEqual([]);
   });
 
+  it("in development serves the client as it stands and starts the server anew when it changes", async () => {
+    const folder = await copyOfStart();
+    const port = String(await freePort());
+    const origin = `http://127.0.0.1:${port}`;
+    const shop = start(["server/start/dev.mjs"], { folder, env: { ...process.env, PORT: port } });
+    await shop.waitFor(/Ctrl-C stops everything/);
+    expect(shop.output()).toContain(`Blockwright is ready: ${origin}\n`);
+    const processes = [...(await childrenOf(folder)), await databaseProcess(folder)];
+    expect(await (await fetch(`${origin}/api/session`)).text()).toBe("ok");
+    expect(await (await fetch(`${origin}/web/main.ts`)).text()).toContain('document.title = "Copy"');
+
+    await writeFile(join(folder, "web/main.ts"), 'document.title = "Changed";');
+    await expect
+      .poll(async () => (await fetch(`${origin}/web/main.ts`)).text(), { timeout: 10_000 })
+      .toContain('document.title = "Changed"');
+    const server = join(folder, "server/main.ts");
+    await writeFile(server, (await readFile(server, "utf8")).replace('end("ok")', 'end("changed")'));
+    await expect
+      .poll(async () => (await fetch(`${origin}/api/session`)).text(), { timeout: 20_000, interval: 200 })
+      .toBe("changed");
+
+    shop.child.kill("SIGTERM");
+    expect(await shop.ended).toMatchObject({ code: 0, stderr: "" });
+    expect(processes.filter(lives)).toEqual([]);
+    await expect(fetch(origin)).rejects.toThrow();
+  });
+
   it("ends what a killed start left running", async () => {
     const folder = await copyOfStart({ packages: false });
     const leftOver = spawn("sleep", ["600"], { detached: true, stdio: "ignore" });

@@ -49,6 +49,7 @@ export async function copyOfStart({ packages = true }: { packages?: boolean } = 
     await mkdir(dirname(join(folder, name)), { recursive: true });
     await writeFile(join(folder, name), text);
   }
+  await cp(join(checkout, "vite.config.ts"), join(folder, "vite.config.ts"));
   await writeFile(
     join(folder, "package.json"),
     JSON.stringify({ name: "copy", private: true, type: "module" }),
