@@ -6,7 +6,7 @@ const onDatabase = ["./tests/support/global-setup.ts"];
 
 /** In development the client's own server stands in front and hands these to the product's server. */
 const serverOrigin = process.env["SERVER_ORIGIN"] ?? "http://127.0.0.1:4701";
-const serverPaths = ["/api", "/healthz", "/readyz"];
+const serverPaths = ["/api", "/order-link", "/healthz", "/readyz"];
 
 export default defineConfig({
   plugins: [react(), tailwindcss()],
