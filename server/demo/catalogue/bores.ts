@@ -13,22 +13,30 @@ export const marlBores = bores(4000, 4155);
 export const basaltBores = bores(4000, 4200);
 export const gneissBores = bores(4440, 4640);
 
-const boreSpacings = { small: 4400, large: 4840 };
+/** Barrel outside diameter and core shift by family, thousandths of an inch, as in the family documents. */
+const barrels = [
+  { name: "Marl", bores: marlBores, outside: 4615, shift: 30 },
+  { name: "Basalt", bores: basaltBores, outside: 4720, shift: 20 },
+  { name: "Gneiss", bores: gneissBores, outside: 5140, shift: 20 },
+];
 
 function boreOption(thousandths: number): OptionDocument {
-  const inches = (thousandths / 1000).toFixed(3);
-  const spacing = thousandths < 4300 ? boreSpacings.small : boreSpacings.large;
-  const base = thousandths < 4300 ? 4000 : 4440;
-  const web = ((spacing - thousandths) / 1000).toFixed(3);
-  const over = thousandths - base;
+  const large = thousandths > 4300;
+  const over = thousandths - (large ? 4440 : 4000);
+  const web = ((large ? 4840 : 4400) - thousandths) / 1000;
+  const walls = barrels
+    .filter(({ bores: sizes }) => sizes.includes(thousandths))
+    .map(
+      ({ name, outside, shift }) => `${(((outside - thousandths) / 2 - shift) / 1000).toFixed(4)} in ${name}`,
+    );
   const room =
     over === 0
-      ? "The base bore: the thickest walls and all the overbores still ahead of you."
-      : `${(over / 1000).toFixed(3)} in over base, which takes ${(over / 2000).toFixed(4)} in from every wall.`;
+      ? "The base bore: the thickest walls, with every overbore still ahead of you."
+      : `${(over / 1000).toFixed(3)} in over the base bore.`;
   return {
     id: boreId(thousandths),
-    name: `${inches} in`,
-    description: `${room} Leaves ${web} in between bores.`,
+    name: `${(thousandths / 1000).toFixed(3)} in`,
+    description: `${room} Nominal wall ${walls.join(", ")}; ${web.toFixed(3)} in between bores.`,
     values: { bore: thousandths / 1000 },
   };
 }

@@ -71,7 +71,7 @@ export const castingChoices: ChoiceDocument[] = [
   {
     id: "family",
     name: "Family",
-    question: "Which casting?",
+    question: "Which casting do you start from?",
     help: {
       what: "The casting decides bore spacing, barrel thickness, deck heights and how far a crank may swing.",
       when: "Start from the heads and crank you have, or from the displacement you want.",

@@ -220,14 +220,6 @@ const fitRules: RuleDocument[] = [
     require: figureAtLeast("rodToCase", 0.08),
   },
   {
-    id: "counterweight-to-case",
-    kind: "expression",
-    severity: "stop",
-    sentence: "Counterweights need 0.060 in to the case.",
-    why: `The crank bends at speed. ${common}`,
-    require: figureAtLeast("counterweightToCase", 0.06),
-  },
-  {
     id: "piston-proud",
     kind: "expression",
     severity: "stop",
