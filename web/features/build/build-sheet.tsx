@@ -63,7 +63,7 @@ function PhoneStrip({ action }: { action: ReactNode }) {
           {price === null ? "No price yet" : money(price.totalCents)}
         </span>
         <span className="block truncate text-sm text-iron">
-          {shipsOn === null ? stateWords(evaluation) : `Ships about ${date(shipsOn)}`}
+          {shipsOn === null ? `${stateWords(evaluation)} answered` : `Ships about ${date(shipsOn)}`}
         </span>
       </p>
       {action}

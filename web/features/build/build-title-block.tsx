@@ -13,9 +13,9 @@ export function BuildTitleBlock() {
     { label: "Family", value: family?.name ?? "not chosen" },
     { label: "Spec code", value: <SpecCodeCopy />, wide: true },
     { label: "Weight, bare", value: weight === null ? "not known yet" : pounds(weight) },
-    { label: "State", value: stateWords(evaluation) },
+    { label: "Answered", value: stateWords(evaluation) },
     { label: "Ships, estimate", value: shipsOn === null ? "not known yet" : date(shipsOn) },
-    { label: "Price", value: price === null ? "not known yet" : money(price.totalCents), strong: true },
+    { label: "Price", value: price === null ? "none yet" : money(price.totalCents), strong: true },
   ];
   return <TitleBlock label="Build" cells={cells} />;
 }

@@ -70,11 +70,11 @@ export function stopCount(evaluation: Evaluation): number {
   return evaluation.findings.filter(({ severity }) => severity === "stop").length;
 }
 
-/** Where the build stands: "14 of 22 answered", "1 stop", "Complete". */
+/** Where the build stands: "14 of 22", "1 stop", "Complete". */
 export function stateWords(evaluation: Evaluation): string {
   const stops = stopCount(evaluation);
   if (stops > 0) return stops === 1 ? "1 stop" : `${stops} stops`;
   const all = evaluation.choices.length;
   const left = evaluation.unanswered.length;
-  return left === 0 ? "Complete" : `${all - left} of ${all} answered`;
+  return left === 0 ? "Complete" : `${all - left} of ${all}`;
 }

@@ -5,9 +5,9 @@ import { useBuildDesk } from "./build-desk.tsx";
 import { figureRows } from "./figure-rows.ts";
 import { useLengthUnit, type LengthUnit } from "./length-unit.ts";
 
-const units: { unit: LengthUnit; name: string; spoken: string }[] = [
-  { unit: "in", name: "in", spoken: "Inches" },
-  { unit: "mm", name: "mm", spoken: "Millimetres" },
+const units: { unit: LengthUnit; name: string }[] = [
+  { unit: "in", name: "inches" },
+  { unit: "mm", name: "millimetres" },
 ];
 
 /** The engineering figures of the build in inches or millimetres; formulas and limits on demand. */
@@ -32,13 +32,12 @@ export function FiguresPanel() {
             <button
               key={entry.unit}
               type="button"
-              aria-label={entry.spoken}
               aria-pressed={unit === entry.unit}
               onClick={() => {
                 setUnit(entry.unit);
               }}
               className={classNames(
-                "min-h-8 min-w-10 px-2 numerals not-first:border-l not-first:border-edge",
+                "min-h-8 px-2.5 numerals not-first:border-l not-first:border-edge",
                 unit === entry.unit ? "bg-dye text-on-dye" : "bg-sheet hover:bg-wash",
               )}
             >

@@ -7,7 +7,6 @@ import { engravingLength } from "#shared/catalogue/build-address.ts";
 import { Button, ButtonLink } from "#web/components/button.tsx";
 import { CautionLine } from "#web/components/caution-line.tsx";
 import { ErrorSummary } from "#web/components/error-summary.tsx";
-import { PageHeading } from "#web/components/page-heading.tsx";
 import { TextArea } from "#web/components/text-area.tsx";
 import { TextField } from "#web/components/text-field.tsx";
 import { catalogueQuery } from "#web/lib/catalogue.ts";
@@ -23,8 +22,8 @@ import { EngravingPreview } from "./engraving-preview.tsx";
 import { cartFieldsSchema, usePutInCart } from "./put-in-cart.ts";
 import { keepSpecialRequest, specialRequestDraft } from "./special-request-draft.ts";
 import { useSpecCode } from "./spec-code-copy.tsx";
+import { StepHeading } from "./step-heading.tsx";
 import { reviewStep } from "./step-list.tsx";
-import { UndoButtons } from "./undo-buttons.tsx";
 import { stepOf, WhatIsMissing } from "./what-is-missing.tsx";
 
 const mostCharacters = 500;
@@ -72,14 +71,11 @@ export function ReviewForm() {
   const requestField = register("specialRequest");
   return (
     <form onSubmit={(event) => void send(event)} noValidate className="[&_input]:scroll-my-28">
-      <div className="mb-6">
-        <PageHeading
-          title="Review"
-          over={`Step ${current.catalogue.steps.length + 1} of ${current.catalogue.steps.length + 1}`}
-          lead="Look everything over. The shop checks the build once more before the block is made."
-          actions={<UndoButtons />}
-        />
-      </div>
+      <StepHeading
+        title="Review"
+        position={current.catalogue.steps.length}
+        intro="Look everything over. The shop checks the build once more before the block is made."
+      />
       <BuildSheet here={reviewStep} action={<ReviewAction busy={putInCart.isPending} />}>
         <div className="space-y-8">
           <ErrorSummary errors={formErrors(formState.errors)} attempt={formState.submitCount} />

@@ -4,14 +4,15 @@ import type { Step } from "#shared/catalogue/catalogue.ts";
 import { Button } from "#web/components/button.tsx";
 import { CautionLine } from "#web/components/caution-line.tsx";
 import { Notice } from "#web/components/notice.tsx";
-import { PageHeading } from "#web/components/page-heading.tsx";
+import { TextLink } from "#web/components/text-link.tsx";
 import { stepPath } from "./build-address.ts";
 import { useBuildDesk } from "./build-desk.tsx";
 import { BuildSheet } from "./build-sheet.tsx";
 import { ChoiceQuestion } from "./choice-question.tsx";
 import { NumberQuestion } from "./number-question.tsx";
+import { StepHeading } from "./step-heading.tsx";
 import { reviewStep } from "./step-list.tsx";
-import { UndoButtons } from "./undo-buttons.tsx";
+import { stepOf } from "./what-is-missing.tsx";
 
 /** One step of the form. Enter goes on to the next; nothing has to be answered before. */
 export function StepForm({ step }: { step: Step }) {
@@ -31,14 +32,7 @@ export function StepForm({ step }: { step: Step }) {
   );
   return (
     <form onSubmit={goOn} noValidate className="[&_input]:scroll-my-28">
-      <div className="mb-6">
-        <PageHeading
-          title={step.name}
-          over={`Step ${position + 1} of ${catalogue.steps.length + 1}`}
-          lead={step.intro}
-          actions={<UndoButtons />}
-        />
-      </div>
+      <StepHeading title={step.name} position={position} intro={step.intro} />
       <BuildSheet
         here={step.id}
         action={
@@ -49,17 +43,23 @@ export function StepForm({ step }: { step: Step }) {
         }
       >
         <div className="space-y-10">
-          {problems.length > 0 && (
-            <Notice kind="caution" title="Part of the address could not be read and was left out">
-              {problems.join(" ")}
-            </Notice>
-          )}
-          {step.caution !== undefined && <CautionLine>{step.caution}</CautionLine>}
-          {build.answers["family"] === undefined && !step.choices.includes("family") && (
-            <p className="text-sm text-iron">
-              No family is chosen yet, so prices, days and weights are not known.
-            </p>
-          )}
+          <div className="space-y-2 empty:hidden">
+            {problems.length > 0 && (
+              <Notice kind="caution" title="Part of the address could not be read and was left out">
+                {problems.join(" ")}
+              </Notice>
+            )}
+            {step.caution !== undefined && <CautionLine>{step.caution}</CautionLine>}
+            {build.answers["family"] === undefined && !step.choices.includes("family") && (
+              <p className="pl-6 text-sm text-iron">
+                Prices, days and weights show once a{" "}
+                <TextLink to={{ pathname: stepPath(stepOf("family", catalogue.steps)), search }}>
+                  family
+                </TextLink>{" "}
+                is chosen.
+              </p>
+            )}
+          </div>
           {step.choices.map((id) => {
             const choice = catalogue.choices.find((candidate) => candidate.id === id);
             const state = evaluation.choices.find((candidate) => candidate.choice === id);

@@ -1,3 +1,4 @@
+import type { ReactNode } from "react";
 import { Redo2, Undo2 } from "lucide-react";
 import { Button } from "#web/components/button.tsx";
 import { useBuildDesk } from "./build-desk.tsx";
@@ -22,7 +23,7 @@ interface TurnProps {
   label: string;
   keys: string;
   act: (() => void) | null;
-  icon: React.ReactNode;
+  icon: ReactNode;
 }
 
 function Turn({ label, keys, act, icon }: TurnProps) {
@@ -33,9 +34,9 @@ function Turn({ label, keys, act, icon }: TurnProps) {
       aria-keyshortcuts={keys}
       title={keys.replaceAll("Control", "Ctrl")}
       onClick={() => act?.()}
-      className="aria-disabled:border-rule aria-disabled:text-iron"
+      className="max-sm:px-3 aria-disabled:border-rule aria-disabled:text-iron"
     >
-      {label}
+      <span className="max-sm:sr-only">{label}</span>
     </Button>
   );
 }

@@ -7,9 +7,7 @@ interface DeckFigureProps {
 /** Iron beyond the outermost barrels and beside them, inches. */
 const end = 0.45;
 const side = 0.75;
-const gap = 1.1;
-const margin = 0.35;
-const dimensionRoom = 1.15;
+const margin = { side: 0.3, top: 1.3, bottom: 1.2 };
 
 /**
  * One deck of each family from above, all to one scale: bores at their base size on their spacing, barrels dashed around
@@ -20,32 +18,23 @@ export function DeckFigure({ families }: DeckFigureProps) {
     const { boreSpacing, baseBore, barrelOutsideDiameter, cylinders } = family.values;
     if (boreSpacing === undefined || baseBore === undefined || barrelOutsideDiameter === undefined) return [];
     const bores = Math.round((cylinders ?? 8) / 2);
-    return [
-      {
-        family,
-        boreSpacing,
-        baseBore,
-        barrelOutsideDiameter,
-        bores,
-        length: (bores - 1) * boreSpacing + barrelOutsideDiameter + 2 * end,
-        height: barrelOutsideDiameter + 2 * side,
-      },
-    ];
+    const length = (bores - 1) * boreSpacing + barrelOutsideDiameter + 2 * end;
+    const height = barrelOutsideDiameter + 2 * side;
+    return [{ family, boreSpacing, baseBore, barrelOutsideDiameter, bores, length, height }];
   });
-  const width = Math.max(0, ...decks.map(({ length }) => length)) + 2 * margin;
-  const tops = decks.map((_, index) =>
-    decks.slice(0, index).reduce((y, { height }) => y + height + dimensionRoom + gap, margin + 0.55),
-  );
-  const last = decks.at(-1);
-  const height = last === undefined ? 0 : (tops.at(-1) ?? 0) + last.height + dimensionRoom + margin;
+  // The same frame for each, so that they share one scale.
+  const width = Math.max(0, ...decks.map(({ length }) => length)) + 2 * margin.side;
+  const height = Math.max(0, ...decks.map((deck) => deck.height)) + margin.top + margin.bottom;
   return (
-    <svg viewBox={`0 0 ${width} ${height}`} aria-hidden="true" className="block w-full text-ink">
-      {decks.map((deck, index) => (
-        <g key={deck.family.id} transform={`translate(${margin} ${tops[index] ?? 0})`}>
-          <Deck {...deck} />
-        </g>
+    <div aria-hidden="true" className="grid gap-x-6 gap-y-1 text-ink sm:auto-cols-fr sm:grid-flow-col">
+      {decks.map((deck) => (
+        <svg key={deck.family.id} viewBox={`0 0 ${width} ${height}`} className="block w-full">
+          <g transform={`translate(${margin.side} ${margin.top})`}>
+            <Deck {...deck} />
+          </g>
+        </svg>
       ))}
-    </svg>
+    </div>
   );
 }
 

@@ -3,7 +3,8 @@ import type { ReactNode } from "react";
 import type { CurrentCatalogue } from "#shared/contracts/catalogue.ts";
 import { useNarrow } from "#web/components/narrow.ts";
 import { date, inches, money, pounds } from "#web/lib/format.ts";
-import { joined, optionsIn, type FamilySummary } from "./family-summary.ts";
+import { familyChoices } from "./family-choices.ts";
+import { joined, type FamilySummary } from "./family-summary.ts";
 
 interface ComparisonRow {
   name: string;
@@ -96,9 +97,14 @@ function comparisonGroups(current: CurrentCatalogue, families: FamilySummary[]):
   const facts = factNames.map((name) =>
     row(name, ({ family }) => family.facts.find((fact) => fact.name === name)?.value ?? "none"),
   );
-  const choices = current.catalogue.choices
-    .filter(({ id }) => id !== "family")
-    .map(({ id, name }) => row(name, (summary) => choiceWords(current, summary, id)));
+  const open = families.map(({ family }) => familyChoices(current, family.id));
+  const choices = (open[0] ?? []).map(({ id, name }, at): ComparisonRow => ({
+    name,
+    values: families.map(({ bores }, index) =>
+      id === "bore" ? bores : choiceWords(open[index]?.[at]?.options ?? []),
+    ),
+    numeric: false,
+  }));
   const differentFirst = (rows: ComparisonRow[]) => [
     ...rows.filter((candidate) => !alike(candidate)),
     ...rows.filter(alike),
@@ -118,16 +124,10 @@ function comparisonGroups(current: CurrentCatalogue, families: FamilySummary[]):
   ];
 }
 
-function choiceWords(
-  { catalogue }: CurrentCatalogue,
-  { family, bores }: FamilySummary,
-  choice: string,
-): string {
-  if (choice === "bore") return bores;
-  const names = optionsIn(catalogue, family, choice).map(({ name }) => name);
+function choiceWords(names: string[]): string {
   const most = 5;
   return names.length > most
-    ? `${joined(names.slice(0, most))} and ${names.length - most} more`
+    ? `${joined(names.slice(0, most))}; and ${names.length - most} more`
     : joined(names);
 }
 

@@ -4,7 +4,8 @@ import { DrawingFrame } from "#web/components/drawing-frame.tsx";
 import { TitleBlock } from "#web/components/title-block.tsx";
 import { date, inches, money, pounds } from "#web/lib/format.ts";
 import { DeckFigure } from "./deck-figure.tsx";
-import { joined, optionsIn, type FamilySummary } from "./family-summary.ts";
+import { familyChoices } from "./family-choices.ts";
+import { joined, type FamilySummary } from "./family-summary.ts";
 
 interface FamilySheetProps {
   current: CurrentCatalogue;
@@ -70,22 +71,17 @@ export function FamilySheet({ current, summary, action }: FamilySheetProps) {
             What you may choose
           </h2>
           <dl className="mt-2 border-t-2 border-ink">
-            {current.catalogue.choices
-              .filter(({ id }) => id !== "family")
-              .map(({ id, name }) => {
-                const names = optionsIn(current.catalogue, family, id).map((option) => option.name);
-                return (
-                  <div key={id} className="grid grid-cols-[8.5rem_1fr] gap-x-4 border-b border-rule py-2">
-                    <dt className="text-iron">{name}</dt>
-                    <dd>
-                      {id === "bore" ? bores : joined(names)}
-                      {names.length === 1 && (
-                        <span className="block text-sm text-iron">One option in this family.</span>
-                      )}
-                    </dd>
-                  </div>
-                );
-              })}
+            {familyChoices(current, family.id).map(({ id, name, options }) => (
+              <div key={id} className="grid grid-cols-[8.5rem_1fr] gap-x-4 border-b border-rule py-2">
+                <dt className="text-iron">{name}</dt>
+                <dd>
+                  {id === "bore" ? bores : joined(options)}
+                  {options.length === 1 && (
+                    <span className="block text-sm text-iron">One option in this family.</span>
+                  )}
+                </dd>
+              </div>
+            ))}
           </dl>
         </section>
       </div>

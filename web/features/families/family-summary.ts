@@ -49,7 +49,7 @@ function summarise({ catalogue, priceList, load, today }: CurrentCatalogue, fami
 }
 
 /** Options of a choice that the family is made with: by the option's own list, and by tables of family and choice. */
-export function optionsIn(catalogue: Catalogue, family: Family, choiceId: string): Option[] {
+function optionsIn(catalogue: Catalogue, family: Family, choiceId: string): Option[] {
   const choice = catalogue.choices.find(({ id }) => id === choiceId);
   const allowed = catalogue.rules.flatMap((rule) => {
     if (rule.kind !== "table" || rule.severity !== "stop") return [];
@@ -64,10 +64,11 @@ export function optionsIn(catalogue: Catalogue, family: Family, choiceId: string
   );
 }
 
-/** "9.025, 9.325 in": a unit that all share is said once. */
+/** "9.025, 9.325 in": a unit that all share is said once; names with a comma of their own are kept apart by semicolons. */
 export function joined(names: readonly string[]): string {
   const shared = names.length > 1 && names.every((name) => name.endsWith(" in"));
-  return shared ? `${names.map(withoutUnit).join(", ")} in` : names.join(", ");
+  if (shared) return `${names.map(withoutUnit).join(", ")} in`;
+  return names.join(names.some((name) => name.includes(",")) ? "; " : ", ");
 }
 
 function withoutUnit(name: string | undefined): string {

@@ -24,8 +24,8 @@ export function Component() {
   const earlier = buildInProgress();
   return (
     <div className="space-y-10">
-      <div className="grid gap-x-10 gap-y-8 lg:grid-cols-[minmax(0,1fr)_26rem]">
-        <div className="space-y-8">
+      <div className="grid items-end gap-x-16 gap-y-8 lg:grid-cols-2">
+        <div className="space-y-6">
           <PageHeading
             title="Bare V8 blocks, cast and machined to your build"
             lead="Choose the block step by step. Every answer is checked against the rest, with its price, weight and ship date beside it."
@@ -36,14 +36,14 @@ export function Component() {
             </ButtonLink>
             {earlier !== null && <TextLink to={earlier}>Go on with the build in progress</TextLink>}
           </div>
-          <SpecCodeField />
         </div>
-        <DrawingFrame caption="Decks from above, bores at base size" remark="One scale; spacing in inches">
-          <div className="aspect-[26/29] p-2 sm:p-4">
-            {data !== undefined && <DeckFigure families={data.catalogue.families} />}
-          </div>
-        </DrawingFrame>
+        <SpecCodeField />
       </div>
+      <DrawingFrame caption="Decks from above, bores at base size" remark="One scale; bore spacing in inches">
+        <div className="min-h-40 px-3 sm:px-6">
+          {data !== undefined && <DeckFigure families={data.catalogue.families} />}
+        </div>
+      </DrawingFrame>
       <section aria-labelledby="families">
         <div className="mb-2 flex flex-wrap items-baseline justify-between gap-x-6">
           <h2 id="families" className="text-2xl">
