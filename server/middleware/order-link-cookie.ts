@@ -1,22 +1,21 @@
 import type { Request, Response } from "express";
-import { config } from "#server/config.ts";
 import type { Actor } from "#server/policies/actor.ts";
 import { orderOfLink } from "#server/services/orders/order-link.ts";
+import { cookieName, isSecure } from "./session.ts";
 
-const secure = config.PUBLIC_ORIGIN.startsWith("https:");
 const KEPT_FOR = 30 * 24 * 3600_000;
 
 /** One cookie for each order that a mailed link opened; its value is the link's token, so that revoking the link ends it. */
-function cookieName(orderNumber: string): string {
-  return `${secure ? "__Host-" : ""}blockwright-order-${orderNumber}`;
+function orderCookie(orderNumber: string): string {
+  return cookieName(`blockwright-order-${orderNumber}`);
 }
 
 /** Lets this browser see the one order that its link is for. */
 export function setOrderCookie(response: Response, orderNumber: string, token: string): void {
-  response.cookie(cookieName(orderNumber), token, {
+  response.cookie(orderCookie(orderNumber), token, {
     httpOnly: true,
     sameSite: "lax",
-    secure,
+    secure: isSecure,
     path: "/",
     maxAge: KEPT_FOR,
   });
@@ -24,7 +23,7 @@ export function setOrderCookie(response: Response, orderNumber: string, token: s
 
 /** The actor with the order added that this browser's cookie for that number opens, if it does. */
 export async function withOrderLink(actor: Actor, request: Request, orderNumber: string): Promise<Actor> {
-  const token = cookieOf(request, cookieName(orderNumber));
+  const token = cookieOf(request, orderCookie(orderNumber));
   if (token === null) return actor;
   const order = await orderOfLink(token);
   if (order?.number !== orderNumber) return actor;

@@ -19,6 +19,7 @@ import { sendOrderLink } from "#server/services/orders/order-link.ts";
 import { placeOrder } from "#server/services/orders/place-order.ts";
 import { proposeShipDate } from "#server/services/orders/propose-ship-date.ts";
 import { readOrder } from "#server/services/orders/read-order.ts";
+import { countTry } from "#server/services/rate-limits.ts";
 import { Refusal } from "#server/services/refusal.ts";
 import { acknowledgementSchema } from "#shared/contracts/account.ts";
 import { placedOrderSchema, placeOrderRequestSchema } from "#shared/contracts/checkout.ts";
@@ -85,7 +86,9 @@ export const orderRoutes = [
     body: orderLinkRequestSchema,
     response: acknowledgementSchema,
     status: 202,
-    handle: async ({ body }) => {
+    problems: ["too-many-requests"],
+    handle: async ({ body, request }) => {
+      await countTry("order link by address", request.ip ?? "");
       await sendOrderLink(body.orderNumber, body.email);
       return { message: "If this order was placed with this address, a new link is on its way to it." };
     },

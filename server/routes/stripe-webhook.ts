@@ -8,7 +8,7 @@ import { receiveWebhook } from "#server/services/payments/receive-webhook.ts";
 export const stripeWebhookRouter = Router();
 
 stripeWebhookRouter.post(
-  "/api/stripe/webhook",
+  "/api/stripe-webhook",
   express.raw({ type: () => true, limit: "1mb" }),
   async (request, response) => {
     const body: unknown = request.body;
