@@ -209,7 +209,7 @@ describe("a cart that is paid twice all the same", () => {
     const result = await visitor.get(`/api/checkout/result?session=${first.session}`);
     expect(result.body).toMatchObject({ state: "returned" });
     await shop.mail.waitForMessage("ada@example.com", /second payment/);
-    await expectPaidOnce(visitor, second.orderNumber);
+    expect((await readOrder(visitor, second.orderNumber)).state).toBe("placed");
   });
 });
 
