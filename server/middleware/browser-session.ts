@@ -1,4 +1,5 @@
-import type { Request } from "express";
+import type { Request, Response } from "express";
+import { csrfToken } from "./csrf.ts";
 import type { Actor } from "#server/policies/actor.ts";
 import type { PersonView } from "#shared/contracts/person.ts";
 
@@ -6,8 +7,8 @@ const MOST_GRANTS = 50;
 
 /** What a route may do with the browser's session. Nothing is stored, and no cookie set, before one of these is called. */
 export interface BrowserSession {
-  /** Names the session of a signed-in person; null for a visitor. */
-  readonly id: string | null;
+  /** What this browser's changing requests must carry from now on. */
+  csrfToken(): string;
   keepCart(cartId: string): void;
   /** Lets this browser see one order. */
   grantOrder(orderId: string): void;
@@ -17,11 +18,9 @@ export interface BrowserSession {
   signOut(): Promise<void>;
 }
 
-export function browserSession(request: Request): BrowserSession {
+export function browserSession(request: Request, response: Response): BrowserSession {
   return {
-    get id() {
-      return request.session.personId === undefined ? null : request.sessionID;
-    },
+    csrfToken: () => csrfToken(request, response),
     keepCart(cartId) {
       begin(request);
       request.session.cartId = cartId;

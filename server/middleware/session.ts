@@ -58,7 +58,7 @@ export function sessions(): RequestHandler {
     // A request that changes nothing writes nothing; middleware/person.ts notes the use once a minute.
     disableTouch: true,
     checkExpirationInterval: 15 * 60_000,
-    extendDefaultFields: (defaults: object, data: session.SessionData) => ({
+    extendDefaultFields: (defaults: object, data: Partial<session.SessionData>) => ({
       ...defaults,
       personId: data.personId ?? null,
     }),

@@ -3,9 +3,12 @@ import type { z } from "zod";
 import type { Actor } from "#server/policies/actor.ts";
 import type { Policy } from "#server/policies/policy.ts";
 import type { BrowserSession } from "#server/middleware/browser-session.ts";
+import { RequestMismatch } from "#server/middleware/request-mismatch.ts";
 import type { ProblemKind } from "#shared/contracts/problem.ts";
 
 export type Method = "get" | "post" | "patch" | "delete";
+
+type Caching = "never" | "revalidate" | "forever";
 
 /** An answer that is not JSON of the response schema, as a redirect. */
 export class Answer {
@@ -22,7 +25,7 @@ export const redirectTo = (path: `/${string}`): Answer =>
 
 type Shape = z.ZodType | undefined;
 type Read<Schema extends Shape> = Schema extends z.ZodType ? z.output<Schema> : undefined;
-type Written<Schema extends Shape> = Schema extends z.ZodType ? z.input<Schema> : undefined;
+type Written<Schema extends Shape> = Schema extends z.ZodType ? z.input<Schema> : void;
 
 export interface Asked<Params, Query, Body> {
   params: Params;
@@ -31,8 +34,9 @@ export interface Asked<Params, Query, Body> {
   actor: Actor;
   /** What this browser's session holds: its cart, its orders, who signed in. */
   session: BrowserSession;
-  /** For what a route cannot say with the rest: the client's address, a header. */
+  /** For what a route cannot say with the rest: the client's address, a header. Answer by returning, not through `response`. */
   request: Request;
+  response: Response;
 }
 
 interface Definition<Params extends Shape, Query extends Shape, Body extends Shape, Reply extends Shape> {
@@ -50,6 +54,8 @@ interface Definition<Params extends Shape, Query extends Shape, Body extends Sha
   response?: Reply;
   /** 200 with a response, else 204. */
   status?: number;
+  /** Answers are kept nowhere, but for: kept and asked about each time (ETag), or kept for good. */
+  caching?: Caching;
   /** Problems besides those that every route may answer with, for the API document. */
   problems?: readonly ProblemKind[];
   handle(
@@ -68,22 +74,10 @@ export interface Route {
   body: z.ZodType | undefined;
   response: z.ZodType | undefined;
   status: number;
+  caching: Caching;
   problems: readonly ProblemKind[];
   /** Parses with the schemas, in the order params, query, body; a ZodError says which part did not fit. */
   run(asked: Asked<unknown, unknown, unknown>): Promise<unknown>;
-}
-
-/** Thrown when a part of a request does not fit its schema. */
-export class RequestMismatch extends Error {
-  override readonly name = "RequestMismatch";
-  readonly part: "params" | "query" | "body";
-  readonly issues: z.core.$ZodIssue[];
-
-  constructor(part: "params" | "query" | "body", issues: z.core.$ZodIssue[]) {
-    super(`The ${part} do not fit`);
-    this.part = part;
-    this.issues = issues;
-  }
 }
 
 /**
@@ -122,6 +116,7 @@ export function defineRoute<
     body,
     response,
     status: definition.status ?? (response === undefined ? 204 : 200),
+    caching: definition.caching ?? "never",
     problems: definition.problems ?? [],
     run: async (asked) =>
       await definition.handle({

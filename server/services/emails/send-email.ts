@@ -3,24 +3,13 @@ import { transaction } from "#server/database/transaction.ts";
 import { emailKind } from "#server/emails/kinds.ts";
 import { sendMail } from "#server/gateways/mail.ts";
 import { Email } from "#server/models/email.ts";
+import { linkOf } from "#server/emails/links.ts";
 import type { TokenPurpose } from "#server/models/access-token.ts";
 import { presentShop } from "#server/presenters/shop.ts";
 import { issueToken, type TokenSubject } from "#server/services/tokens/issue-token.ts";
 import { shopSettings } from "#server/services/shop/shop-settings.ts";
 
 const LONGEST_ERROR = 500;
-
-/** Where a mailed token leads. The first two pages act by a button only; the last sets a cookie and goes on. */
-const pages: Record<TokenPurpose, (token: string) => string> = {
-  "verify-email": (token) => `/account/verify?token=${token}`,
-  "reset-password": (token) => `/account/reset?token=${token}`,
-  "order-link": (token) => `/order-link/${token}`,
-};
-
-/** The address of a token's page; without a token, the masked one that the Office sees. */
-export function linkOf(purpose: TokenPurpose | null, token = "…"): string {
-  return purpose === null ? config.PUBLIC_ORIGIN : `${config.PUBLIC_ORIGIN}${pages[purpose](token)}`;
-}
 
 /**
  * Sends a waiting message. Its token's hash is committed before the message leaves, so that no link is ever mailed
