@@ -1,7 +1,7 @@
 import { TitleBlock, type TitleBlockCell } from "#web/components/title-block.tsx";
-import { date, money, pounds } from "#web/lib/format.ts";
+import { money, pounds } from "#web/lib/format.ts";
 import { useBuildDesk } from "./build-desk.tsx";
-import { stateWords } from "./build-words.ts";
+import { shortDate, stateWords, stopCount } from "./build-words.ts";
 import { SpecCodeCopy } from "./spec-code-copy.tsx";
 
 /** The strip that every sheet of the build carries. */
@@ -13,8 +13,8 @@ export function BuildTitleBlock() {
     { label: "Family", value: family?.name ?? "not chosen" },
     { label: "Spec code", value: <SpecCodeCopy />, wide: true },
     { label: "Weight, bare", value: weight === null ? "not known yet" : pounds(weight) },
-    { label: "Answered", value: stateWords(evaluation) },
-    { label: "Ships, estimate", value: shipsOn === null ? "not known yet" : date(shipsOn) },
+    { label: stopCount(evaluation) === 0 ? "Answered" : "State", value: stateWords(evaluation) },
+    { label: "Ships, estimate", value: shipsOn === null ? "not known yet" : shortDate(shipsOn) },
     { label: "Price", value: price === null ? "none yet" : money(price.totalCents), strong: true },
   ];
   return <TitleBlock label="Build" cells={cells} />;

@@ -32,7 +32,7 @@ export function optionName(catalogue: Catalogue, choice: string, option: string)
 }
 
 /** What the mend's button says: "Also change cap style to four-bolt splayed, +$310, +2 days". */
-export function mendWords(catalogue: Catalogue, mend: Mend): string {
+export function mendWords(catalogue: Catalogue, mend: Mend, lead = "Also"): string {
   const changes = mend.changes.map(({ choice, to }) =>
     to === null
       ? `drop ${inSentence(choiceName(catalogue, choice))}`
@@ -43,7 +43,8 @@ export function mendWords(catalogue: Catalogue, mend: Mend): string {
     effect.push(mend.priceCents === 0 ? "same price" : shortMoneyChange(mend.priceCents));
   }
   if (mend.days !== null && mend.days !== 0) effect.push(daysChange(mend.days));
-  return [`Also ${listed(changes)}`, ...effect].join(", ");
+  const words = `${lead} ${listed(changes)}`.trim();
+  return [words.charAt(0).toUpperCase() + words.slice(1), ...effect].join(", ");
 }
 
 function listed(parts: string[]): string {
@@ -77,4 +78,9 @@ export function stateWords(evaluation: Evaluation): string {
   const all = evaluation.choices.length;
   const left = evaluation.unanswered.length;
   return left === 0 ? "Complete" : `${all - left} of ${all}`;
+}
+
+/** A date for narrow places: "12 May 2026", "11 Dec 2026". */
+export function shortDate(isoDate: string): string {
+  return date(isoDate).replace(/([A-Z][a-z]{2})[a-z]+/, "$1");
 }

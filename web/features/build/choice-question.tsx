@@ -3,7 +3,7 @@ import type { ChoiceState } from "#shared/rules/evaluation.ts";
 import { OptionList, type OptionRow } from "#web/components/option-list.tsx";
 import { useBuildDesk } from "./build-desk.tsx";
 import { ClosedReason, MendButton } from "./closed-option.tsx";
-import { optionEffects } from "./option-effects.tsx";
+import { optionEffects } from "./option-effects.ts";
 import { SizeChart } from "./size-chart.tsx";
 
 /** Above so many options a choice is shown as a chart of sizes. */
@@ -28,9 +28,11 @@ export function ChoiceQuestion({ choice, state }: ChoiceQuestionProps) {
       name: described?.name ?? option.option,
       description: described?.description === "" ? undefined : described?.description,
       effects: effects.length === 0 ? undefined : <EffectParts parts={effects} />,
-      closed: option.open
-        ? undefined
-        : { reason: <ClosedReason {...wanted} />, mend: <MendButton {...wanted} /> },
+      // What is chosen in a build that breaks a rule is answered for by the notice above the step.
+      closed:
+        option.open || option.chosen
+          ? undefined
+          : { reason: <ClosedReason {...wanted} />, mend: <MendButton {...wanted} /> },
     };
   });
   return (

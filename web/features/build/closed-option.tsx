@@ -40,18 +40,21 @@ export function ClosedReason({ choice, option }: Wanted) {
 }
 
 /** The button that lets a closed option in and changes what stands against it; nothing where no mend exists. */
-export function MendButton({ choice, option }: Wanted) {
+export function MendButton({ choice, option, lead }: Wanted & { lead?: string }) {
   const { current, chooseWithMend } = useBuildDesk();
   const settled = useSettled();
   const found = useMemo(
-    () => (settled === null ? null : mend(settled.context, settled.evaluation.build, { choice, option })),
+    () =>
+      settled === null || !isClosed(settled, { choice, option })
+        ? null
+        : mend(settled.context, settled.evaluation.build, { choice, option }),
     [settled, choice, option],
   );
   if (settled === null) return <span className="block min-h-target" />;
   if (found === null) return null;
   return (
     <MendOffer
-      words={mendWords(current.catalogue, found)}
+      words={mendWords(current.catalogue, found, lead)}
       onTake={() => {
         chooseWithMend({ choice, option }, found);
       }}

@@ -14,6 +14,7 @@ import { formErrors, showRefusal } from "#web/lib/form-errors.ts";
 import { ApiProblem } from "#web/lib/problems.ts";
 import { stepPath } from "./build-address.ts";
 import { useBuildDesk } from "./build-desk.tsx";
+import { BrokenBuild } from "./broken-build.tsx";
 import { BuildSheet } from "./build-sheet.tsx";
 import { stopCount } from "./build-words.ts";
 import { CartFault } from "./cart-fault.tsx";
@@ -80,6 +81,7 @@ export function ReviewForm() {
         <div className="space-y-8">
           <ErrorSummary errors={formErrors(formState.errors)} attempt={formState.submitCount} />
           {putInCart.error !== null && !named && <CartFault error={putInCart.error} sentCents={sentCents} />}
+          <BrokenBuild />
           <WhatIsMissing />
           <ChosenAnswers />
           <section aria-labelledby="for-this-block" className="max-w-form space-y-6">
@@ -148,7 +150,7 @@ function ReviewAction({ busy }: { busy: boolean }) {
         look="main"
         busy={busy}
         busyLabel="Putting it in the cart"
-        className="shrink-0 xl:min-w-44 xl:text-lg"
+        className="shrink-0 xl:w-44 xl:text-lg"
       >
         Put in the cart
       </Button>
@@ -164,7 +166,7 @@ function ReviewAction({ busy }: { busy: boolean }) {
     <ButtonLink
       look="main"
       to={{ pathname: stepPath(target), search, ...(stop === undefined ? { hash: `#${first ?? ""}` } : {}) }}
-      className="shrink-0 xl:min-w-44 xl:text-lg"
+      className="shrink-0 xl:w-44 xl:text-lg"
     >
       {stops > 0 ? "Mend the stop" : left === 1 ? "Answer the last one" : `Answer ${left} more`}
     </ButtonLink>

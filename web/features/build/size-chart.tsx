@@ -8,7 +8,7 @@ import { useBuildDesk, type BuildDesk } from "./build-desk.tsx";
 import { effectParts, inSentence } from "./build-words.ts";
 import { ChoiceHelp } from "./choice-question.tsx";
 import { ClosedReason, MendButton } from "./closed-option.tsx";
-import { optionEffects } from "./option-effects.tsx";
+import { optionEffects } from "./option-effects.ts";
 import { SizeEntry } from "./size-entry.tsx";
 
 interface SizeChartProps {
@@ -149,7 +149,7 @@ function SizeCell({ name, label, state, effects, onLook, onChoose, onKey }: Size
         "has-focus-visible:z-10 has-focus-visible:outline-3 has-focus-visible:outline-offset-2 has-focus-visible:outline-dye",
         state.chosen && "bg-dye text-on-dye",
         !state.open && "cursor-not-allowed",
-        !state.open && !state.chosen && "hatch text-iron line-through",
+        !state.open && !state.chosen && "bg-wash text-iron line-through",
         state.open && !state.chosen && "hover:bg-wash",
       )}
     >

@@ -1,5 +1,5 @@
 import { useState } from "react";
-import { TextField } from "#web/components/text-field.tsx";
+import { controlLook, describedBy, FieldFrame } from "#web/components/field.tsx";
 
 interface SizeEntryProps {
   name: string;
@@ -12,6 +12,7 @@ interface SizeEntryProps {
 
 /** A box to type a size into; Enter goes to it. */
 export function SizeEntry({ name, label, sizes, range, onPick }: SizeEntryProps) {
+  const id = `${name}-typed`;
   const [text, setText] = useState("");
   const [error, setError] = useState<string>();
   const pick = () => {
@@ -27,26 +28,27 @@ export function SizeEntry({ name, label, sizes, range, onPick }: SizeEntryProps)
   };
   return (
     <div className="mt-3 max-w-56">
-      <TextField
-        name={`${name}-typed`}
-        label={label}
-        optional
-        error={error}
-        inputMode="decimal"
-        autoComplete="off"
-        enterKeyHint="go"
-        className="numerals"
-        value={text}
-        onChange={(event) => {
-          setText(event.target.value);
-        }}
-        onKeyDown={(event) => {
-          if (event.key !== "Enter" || text.trim() === "") return;
-          event.preventDefault();
-          pick();
-        }}
-        onBlur={pick}
-      />
+      <FieldFrame id={id} label={label} error={error}>
+        <input
+          id={id}
+          inputMode="decimal"
+          autoComplete="off"
+          enterKeyHint="go"
+          aria-invalid={error !== undefined}
+          aria-describedby={describedBy(id, undefined, error)}
+          className={controlLook(error, "text-lg numerals")}
+          value={text}
+          onChange={(event) => {
+            setText(event.target.value);
+          }}
+          onKeyDown={(event) => {
+            if (event.key !== "Enter" || text.trim() === "") return;
+            event.preventDefault();
+            pick();
+          }}
+          onBlur={pick}
+        />
+      </FieldFrame>
     </div>
   );
 }

@@ -7,6 +7,7 @@ import { Notice } from "#web/components/notice.tsx";
 import { TextLink } from "#web/components/text-link.tsx";
 import { stepPath } from "./build-address.ts";
 import { useBuildDesk } from "./build-desk.tsx";
+import { BrokenBuild } from "./broken-build.tsx";
 import { BuildSheet } from "./build-sheet.tsx";
 import { ChoiceQuestion } from "./choice-question.tsx";
 import { NumberQuestion } from "./number-question.tsx";
@@ -36,7 +37,7 @@ export function StepForm({ step }: { step: Step }) {
       <BuildSheet
         here={step.id}
         action={
-          <Button type="submit" look="main" className="shrink-0 xl:min-w-44 xl:text-lg">
+          <Button type="submit" look="main" className="shrink-0 xl:w-44 xl:text-lg">
             <span className="xl:hidden">Next</span>
             <span className="hidden xl:inline">Next: {next?.name ?? "Review"}</span>
           </Button>
@@ -49,6 +50,7 @@ export function StepForm({ step }: { step: Step }) {
                 {problems.join(" ")}
               </Notice>
             )}
+            <BrokenBuild />
             {step.caution !== undefined && <CautionLine>{step.caution}</CautionLine>}
             {build.answers["family"] === undefined && !step.choices.includes("family") && (
               <p className="pl-6 text-sm text-iron">

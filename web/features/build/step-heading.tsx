@@ -13,14 +13,14 @@ interface StepHeadingProps {
 export function StepHeading({ title, position, intro }: StepHeadingProps) {
   const steps = useBuildDesk().current.catalogue.steps.length + 1;
   return (
-    <div className="mb-4 flex flex-wrap items-end justify-between gap-x-8 gap-y-2 lg:mb-6">
+    <div className="mb-4 flex items-start justify-between gap-x-6 lg:mb-6 lg:items-end">
       <div className="min-w-0 max-lg:[&_.cell-label]:hidden">
         <PageHeading title={title} over={`Step ${position + 1} of ${steps}`} />
+        <p className="mt-1 max-w-text text-iron lg:text-lg">{intro}</p>
       </div>
-      <div className="flex gap-2">
+      <div className="flex shrink-0 gap-2">
         <UndoButtons />
       </div>
-      <p className="max-w-text basis-full text-iron lg:text-lg">{intro}</p>
     </div>
   );
 }

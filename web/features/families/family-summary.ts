@@ -11,6 +11,7 @@ export interface FamilySummary {
   /** "4.000 to 4.155 in" */
   bores: string;
   deckHeights: string;
+  /** The lightest and the strongest: "Two-bolt to four-bolt splayed". */
   mainCaps: string;
   /** The block with the least costly option of every choice, cents. */
   fromCents: number;
@@ -42,7 +43,7 @@ function summarise({ catalogue, priceList, load, today }: CurrentCatalogue, fami
     boreSpacing: family.values["boreSpacing"] ?? null,
     bores: bores.length < 2 ? joined(bores) : `${withoutUnit(bores[0])} to ${bores.at(-1) ?? ""}`,
     deckHeights: joined(names("deckHeight")),
-    mainCaps: joined(names("capStyle")),
+    mainCaps: range(names("capStyle")),
     fromCents,
     shipsOn: estimateShipDate({ minutes: family.minutes, load, today, leadDays: family.leadDays }),
   };
@@ -62,6 +63,12 @@ function optionsIn(catalogue: Catalogue, family: Family, choiceId: string): Opti
     ({ id, families }) =>
       families?.includes(family.id) !== false && allowed.every((options) => options.has(id)),
   );
+}
+
+function range(names: readonly string[]): string {
+  const [first = ""] = names;
+  const last = names.at(-1) ?? "";
+  return names.length < 2 ? first : `${first} to ${last.charAt(0).toLowerCase()}${last.slice(1)}`;
 }
 
 /** "9.025, 9.325 in": a unit that all share is said once; names with a comma of their own are kept apart by semicolons. */

@@ -12,6 +12,7 @@ const columns: Column<FamilySummary>[] = [
     cell: ({ boreSpacing }) => (boreSpacing === null ? "" : inches(boreSpacing, 3)),
     numeric: true,
   },
+  { id: "caps", header: "Main caps", cell: ({ mainCaps }) => mainCaps },
   { id: "weight", header: "Bare weight", cell: ({ family }) => pounds(family.weight), numeric: true },
   { id: "ships", header: "Ships from, estimate", cell: ({ shipsOn }) => date(shipsOn), numeric: true },
   {

@@ -9,7 +9,7 @@ export function optionEffects(current: CurrentCatalogue, choice: string, state: 
   if (state.chosen) return ["chosen"];
   if (state.effect.priceCents === null) return [];
   const parts = effectParts(state.effect);
-  return parts.length === 0 ? ["no change in price, days or weight"] : parts;
+  return parts.length === 0 ? ["no change"] : parts;
 }
 
 function familyParts({ catalogue, priceList }: CurrentCatalogue, id: string): string[] {
