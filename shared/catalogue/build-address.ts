@@ -9,7 +9,7 @@ export const engravingLength = 12;
 export type SearchPairs = [key: string, value: string][];
 
 /** What is wrong with one part of an address; the rest of it is still read. */
-export interface AddressProblem {
+interface AddressProblem {
   key: string;
   message: string;
 }

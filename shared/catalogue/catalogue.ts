@@ -11,7 +11,7 @@ const identifier = z.string().regex(/^[a-z][A-Za-z0-9]*$/, "a camelCase word");
 /** Inches (or another plain quantity) as written in the catalogue; exact to 0.00005. */
 const quantity = z.number();
 
-export const severitySchema = z.enum(["stop", "caution", "note"]);
+const severitySchema = z.enum(["stop", "caution", "note"]);
 export type Severity = z.infer<typeof severitySchema>;
 
 export const workCentreSchema = z.enum([
@@ -114,7 +114,7 @@ export type Expression =
   | { difference: [Expression, Expression] }
   | { product: [Expression, Expression] };
 
-export const expressionSchema: z.ZodType<Expression> = z.lazy(() =>
+const expressionSchema: z.ZodType<Expression> = z.lazy(() =>
   z.union([
     z.strictObject({ constant: z.number() }),
     z.strictObject({ figure: identifier }),
@@ -135,7 +135,7 @@ export type Condition =
   | { any: Condition[] }
   | { not: Condition };
 
-export const conditionSchema: z.ZodType<Condition> = z.lazy(() =>
+const conditionSchema: z.ZodType<Condition> = z.lazy(() =>
   z.union([
     z.strictObject({ choice: identifier, in: z.array(identifier).min(1) }),
     z.strictObject({ word: identifier, in: z.array(z.string()).min(1) }),
@@ -160,7 +160,7 @@ const ruleBase = {
 };
 
 /** When `when` holds (absent = always), `require` must hold. */
-export const expressionRuleSchema = z.object({
+const expressionRuleSchema = z.object({
   ...ruleBase,
   kind: z.literal("expression"),
   when: conditionSchema.optional(),
@@ -168,7 +168,7 @@ export const expressionRuleSchema = z.object({
 });
 
 /** Only the listed rows are allowed for these choices; a cell holds one or more option ids. */
-export const tableRuleSchema = z.object({
+const tableRuleSchema = z.object({
   ...ruleBase,
   kind: z.literal("table"),
   choices: z.array(identifier).min(2),
@@ -179,7 +179,7 @@ export const ruleSchema = z.discriminatedUnion("kind", [expressionRuleSchema, ta
 export type Rule = z.infer<typeof ruleSchema>;
 
 /** What a power figure is taken from: bmep range in psi by duty and induction. */
-export const bmepRangeSchema = z.object({
+const bmepRangeSchema = z.object({
   duty: identifier,
   induction: identifier,
   low: z.number(),

@@ -1,8 +1,5 @@
-import { z } from "zod";
-
 /** A whole number of a currency's smallest unit (cents for USD). Never a fraction. */
-export const centsSchema = z.int();
-export type Cents = z.infer<typeof centsSchema>;
+export type Cents = number;
 
 /** Decimal places of the smallest unit by ISO 4217 code (references: npm currency-codes 2.2.0). */
 export const minorUnits: Readonly<Record<string, number>> = {

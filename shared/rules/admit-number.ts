@@ -33,7 +33,7 @@ export function admitNumber(
   if (conflict === null) return { ok: true };
   return {
     ok: false,
-    reason: reasonOf(compiled, given, conflict, null),
+    reason: reasonOf(compiled, { assignment: given, numbers, wanted: null }, conflict),
     mend: cheapestMend(context, compiled, { build, target: given, held: null, numbers }),
   };
 }

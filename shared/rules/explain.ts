@@ -23,7 +23,7 @@ export function explain(context: EvaluationContext, build: Build, wanted: Wanted
     held: new Set([choice]),
   });
   if (conflict === null) throw new RangeError(`${wanted.choice} ${wanted.option} is open`);
-  return reasonOf(compiled, assignment, conflict, choice);
+  return reasonOf(compiled, { assignment, numbers: build.numbers, wanted: choice }, conflict);
 }
 
 /** The answers with the wanted option in place. */
@@ -41,16 +41,22 @@ export function withWanted(
   return { choice, assignment };
 }
 
+/** What the conflict was asked of: the answers, the typed numbers, and the wanted option's choice if there is one. */
+interface AskedOf {
+  assignment: Assignment;
+  numbers: Readonly<Record<string, string>>;
+  wanted: number | null;
+}
+
 /** A conflict in the words of the catalogue. */
-export function reasonOf(
-  compiled: CompiledCatalogue,
-  assignment: Assignment,
-  conflict: Conflict,
-  wanted: number | null,
-): Reason {
+export function reasonOf(compiled: CompiledCatalogue, asked: AskedOf, conflict: Conflict): Reason {
+  const { assignment, wanted } = asked;
   const rules = conflict.stops.flatMap((stop) => compiled.stops[stop]?.rule ?? []);
   const against = conflict.choices.map((index) => named(compiled, assignment, index));
-  const numbers = conflict.numbers.map((id) => compiled.numberFields.get(id)?.name ?? id);
+  const numbers = conflict.numbers.map((id) => {
+    const field = compiled.numberFields.get(id);
+    return `${field?.name ?? id}: ${asked.numbers[id] ?? ""} ${field?.unit ?? ""}`.trim();
+  });
   const sentence =
     rules.length > 0
       ? [...rules.map((rule) => rule.sentence), heldBy([...against.map(({ text }) => text), ...numbers])]

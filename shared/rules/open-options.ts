@@ -2,7 +2,7 @@ import type { Assignment, CompiledCatalogue, Problem } from "./compile.ts";
 import { findExtension, type SearchWishes } from "./search.ts";
 
 /** The families that answers allow, as problems at the typed numbers: the chosen one, or all. */
-export function problemsFor(
+function problemsFor(
   compiled: CompiledCatalogue,
   given: Assignment,
   numbers: Readonly<Record<string, string>>,

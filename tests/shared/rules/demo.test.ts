@@ -53,7 +53,7 @@ describe("choosing on the demo catalogue", { timeout: 120_000 }, () => {
           evaluation: { orderable: true, unanswered: [] },
         });
       }),
-      { numRuns: 60 },
+      { numRuns: 30 },
     );
   });
 
@@ -65,7 +65,7 @@ describe("choosing on the demo catalogue", { timeout: 120_000 }, () => {
         const backward = evaluate(demoContext, buildOf(Object.fromEntries(answers.reverse())));
         expect(backward).toEqual(forward);
       }),
-      { numRuns: 25 },
+      { numRuns: 15 },
     );
   });
 
@@ -109,9 +109,9 @@ describe("choosing on the demo catalogue", { timeout: 120_000 }, () => {
           }
         }
       }),
-      { numRuns: 40 },
+      { numRuns: 15 },
     );
-    expect(mended).toBeGreaterThan(30);
+    expect(mended).toBeGreaterThan(10);
   });
 
   test("an option's effect is the difference that choosing it makes", () => {
@@ -125,6 +125,20 @@ describe("choosing on the demo catalogue", { timeout: 120_000 }, () => {
         expect(days).toBe(effect.days);
       }
     }
+  });
+
+  test("the weight follows the bore as delivered, and the finish bore while the finish is open", () => {
+    // 8 x pi/4 x (d^2 - 4^2) x (9.025 - 3.375) in of grey iron at 0.258 lb/cu in.
+    const bored = (bore: number): number => 8 * (Math.PI / 4) * (bore ** 2 - 16) * 5.65 * 0.258;
+    const weight = (answers: Build["answers"]) =>
+      evaluate(demoContext, buildOf({ family: "marl", ...answers })).weight;
+    expect(weight({})).toBe(185);
+    expect(weight({ bore: "b4125" })).toBeCloseTo(185 - bored(4.125), 9);
+    expect(weight({ bore: "b4125", boreFinish: "rough" })).toBeCloseTo(185 - bored(4.095), 9);
+    expect(weight({ bore: "b4125", boreFinish: "finishHoned", capStyle: "fourBoltStraight" })).toBeCloseTo(
+      189 - bored(4.125),
+      9,
+    );
   });
 
   test("without a family there is no price, weight or date, and no effect", () => {
@@ -208,6 +222,13 @@ describe("typed numbers", () => {
     ]);
     expect(caps({ powerAim: "451" })).toEqual(["fourBoltStraight", "fourBoltSplayedDuctile"]);
     expect(caps({ rpmAim: "7001" })).toEqual(["fourBoltSplayedDuctile"]);
+    const build = buildOf({ family: "marl" }, { powerAim: "500", rpmAim: "5500" });
+    expect(explain(demoContext, build, { choice: "capStyle", option: "twoBolt" })).toEqual({
+      sentence: "Two-bolt main caps are for up to 450 hp and 6,000 rpm. Set by Power aimed at: 500 hp.",
+      answers: [],
+      numbers: ["powerAim"],
+      rules: ["two-bolt-load"],
+    });
   });
 
   test("a number that leaves nothing is refused with its reason and mend, and the build stays", () => {
