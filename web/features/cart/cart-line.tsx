@@ -60,7 +60,7 @@ export function CartLine({ line, quantity, onQuantity, onRemove }: CartLineProps
             Remove
           </Button>
         </div>
-        <p className="text-right">
+        <p className="ml-auto text-right">
           <span className="cell-label block">
             {line.quantity === 1 ? "One block" : `${line.quantity} blocks at ${money(build.priceCents)}`}
           </span>

@@ -100,67 +100,75 @@ export function CheckoutForm({ cart, person, onPay }: CheckoutFormProps) {
   const messageOf = (path: string) => errors.find((error) => error.field === path)?.message;
   return (
     <FormProvider {...form}>
-      <form noValidate onSubmit={(event) => void pay(event)} className="max-w-form space-y-8">
-        <ErrorSummary errors={errors} attempt={formState.submitCount} />
-        <fieldset className="space-y-5">
-          <legend className="mb-3 font-condensed text-xl font-semibold">Who orders</legend>
-          <TextField
-            {...register("contact.name")}
-            label="Name"
-            autoComplete="name"
-            error={messageOf("contact.name")}
-          />
-          <TextField
-            {...register("contact.email")}
-            label="E-mail"
-            hint="The receipt and the promised date go here."
-            type="email"
-            inputMode="email"
-            autoComplete="email"
-            spellCheck={false}
-            error={messageOf("contact.email")}
-          />
-          <TextField
-            {...register("contact.phone")}
-            label="Telephone"
-            hint="For the carrier's delivery appointment, and for the shop's questions."
-            type="tel"
-            inputMode="tel"
-            autoComplete="tel"
-            error={messageOf("contact.phone")}
-          />
-        </fieldset>
-        <fieldset className="space-y-5">
-          <legend className="mb-3 font-condensed text-xl font-semibold">Delivery</legend>
-          <DeliveryFields messageOf={messageOf} />
-        </fieldset>
-        <section aria-labelledby="amounts" className="space-y-4">
-          <h2 id="amounts" className="text-xl">
-            What it costs
-          </h2>
-          <OrderAmounts cart={cart} totals={shown} stale={shown !== undefined && stale} />
-          {totals.isError && (
-            <RequestFault
-              error={totals.error}
-              onRetry={() => void totals.refetch()}
-              retrying={totals.isFetching}
+      <form
+        noValidate
+        onSubmit={(event) => void pay(event)}
+        className="grid gap-x-16 gap-y-8 lg:grid-cols-[minmax(0,34rem)_1fr]"
+      >
+        <div className="max-w-form space-y-8">
+          <ErrorSummary errors={errors} attempt={formState.submitCount} />
+          <fieldset className="space-y-5">
+            <legend className="mb-3 font-condensed text-xl font-semibold">Who orders</legend>
+            <TextField
+              {...register("contact.name")}
+              label="Name"
+              autoComplete="name"
+              error={messageOf("contact.name")}
             />
-          )}
-        </section>
-        <PlacingFault error={place.error} seenCents={place.variables?.expectedTotalCents ?? null} />
-        <div className="space-y-2">
-          <Button
-            type="submit"
-            look="main"
-            wide
-            busy={busy}
-            busyLabel={leaving ? "Opening the payment page" : "Placing the order"}
-          >
-            {shown === undefined ? "Pay" : `Pay ${money(shown.totalCents)}`}
-          </Button>
-          <p className="text-sm text-iron">
-            Places the order and opens the secure payment page. Card details are typed there, never here.
-          </p>
+            <TextField
+              {...register("contact.email")}
+              label="E-mail"
+              hint="The receipt and the promised date go here."
+              type="email"
+              inputMode="email"
+              autoComplete="email"
+              spellCheck={false}
+              error={messageOf("contact.email")}
+            />
+            <TextField
+              {...register("contact.phone")}
+              label="Telephone"
+              hint="For the carrier's delivery appointment, and for the shop's questions."
+              type="tel"
+              inputMode="tel"
+              autoComplete="tel"
+              error={messageOf("contact.phone")}
+            />
+          </fieldset>
+          <fieldset className="space-y-5">
+            <legend className="mb-3 font-condensed text-xl font-semibold">Delivery</legend>
+            <DeliveryFields messageOf={messageOf} />
+          </fieldset>
+        </div>
+        <div className="max-w-form space-y-6 self-start lg:sticky lg:top-8">
+          <section aria-labelledby="amounts" className="space-y-4">
+            <h2 id="amounts" className="text-xl">
+              What it costs
+            </h2>
+            <OrderAmounts cart={cart} totals={shown} stale={shown !== undefined && stale} />
+            {totals.isError && (
+              <RequestFault
+                error={totals.error}
+                onRetry={() => void totals.refetch()}
+                retrying={totals.isFetching}
+              />
+            )}
+          </section>
+          <PlacingFault error={place.error} seenCents={place.variables?.expectedTotalCents ?? null} />
+          <div className="space-y-2">
+            <Button
+              type="submit"
+              look="main"
+              wide
+              busy={busy}
+              busyLabel={leaving ? "Opening the payment page" : "Placing the order"}
+            >
+              {shown === undefined ? "Pay" : `Pay ${money(shown.totalCents)}`}
+            </Button>
+            <p className="text-sm text-iron">
+              Places the order and opens the secure payment page. Card details are typed there, never here.
+            </p>
+          </div>
         </div>
       </form>
     </FormProvider>

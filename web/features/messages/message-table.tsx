@@ -22,7 +22,7 @@ export function MessageTable({ messages, timeZone, empty }: MessageTableProps) {
       empty={empty}
       columns={[
         { id: "subject", header: "Subject", cell: (message) => message.subject },
-        { id: "to", header: "To", cell: (message) => <span className="break-all">{message.to}</span> },
+        { id: "to", header: "To", cell: (message) => <span className="wrap-anywhere">{message.to}</span> },
         { id: "state", header: "State", cell: (message) => <MessageStateTag message={message} /> },
         {
           id: "order",
@@ -37,7 +37,6 @@ export function MessageTable({ messages, timeZone, empty }: MessageTableProps) {
           header: "Sent",
           cell: (message) => (message.sentAt === null ? "\u2013" : dateTime(message.sentAt, timeZone)),
         },
-        { id: "attempts", header: "Attempts", numeric: true, cell: (message) => message.attempts },
       ]}
     />
   );

@@ -7,6 +7,10 @@ import type { BuildView } from "#shared/contracts/build.ts";
 
 /** What was chosen, the figures that follow from it, and what the rules say: side by side where there is room. */
 export function BuildFacts({ build }: { build: BuildView }) {
+  // What reads a number that was never given says nothing about the block that was ordered.
+  const known = build.figures.flatMap(({ value, ...figure }) =>
+    value === null ? [] : [{ ...figure, value }],
+  );
   return (
     <div className="grid gap-x-10 gap-y-6 md:grid-cols-2">
       <Part title="Chosen">
@@ -17,7 +21,7 @@ export function BuildFacts({ build }: { build: BuildView }) {
           <Part title="To bear in mind">
             <ul className="border-t border-rule">
               {build.findings.map((finding) => (
-                <Finding key={finding.rule} severity={finding.severity} undecided={finding.undecided}>
+                <Finding key={finding.rule} severity={finding.severity}>
                   {finding.sentence}
                 </Finding>
               ))}
@@ -26,16 +30,15 @@ export function BuildFacts({ build }: { build: BuildView }) {
         )}
         <Part title="Figures">
           <FigureList
-            figures={build.figures.map((figure) => ({
+            figures={known.map((figure) => ({
               id: figure.id,
               name: figure.name,
-              value:
-                figure.value === null ? null : (
-                  <Quantity
-                    value={fixed(figure.value, figure.places)}
-                    {...(figure.unit === "ratio" ? {} : { unit: figure.unit })}
-                  />
-                ),
+              value: (
+                <Quantity
+                  value={fixed(figure.value, figure.places)}
+                  {...(figure.unit === "ratio" ? {} : { unit: figure.unit })}
+                />
+              ),
             }))}
           />
         </Part>

@@ -18,12 +18,12 @@ import {
   type AcceptFields,
 } from "./accept-fields.ts";
 import { DeclineDialog } from "./decline-dialog.tsx";
-import { OrderLine } from "./order-line.tsx";
+import { OrderLines } from "./order-lines.tsx";
 import { useAcceptOrder } from "./queries.ts";
 
 interface DecisionFormProps {
   review: OrderReview;
-  /** Stands between the lines and the decision. */
+  /** Stands under the decision, beside the lines. */
   children: ReactNode;
 }
 
@@ -79,67 +79,69 @@ export function DecisionForm({ review, children }: DecisionFormProps) {
     );
   });
 
+  const answerTo = (line: OrderReview["lines"][number]) =>
+    line.specialRequest === "" ? undefined : (
+      <TextArea
+        {...register(`answers.${line.id}`)}
+        label="Answer to the special request"
+        hint="The customer reads it in the e-mail and on the order."
+        most={500}
+        defaultValue={start.answers[line.id] ?? ""}
+        error={formState.errors.answers?.[line.id]?.message}
+      />
+    );
+
   return (
     <>
       <form noValidate onSubmit={(event) => void submit(event)} className="space-y-10">
         <ErrorSummary errors={formErrors(formState.errors)} attempt={formState.submitCount} />
-        <ul className="space-y-10">
-          {review.lines.map((line) => (
-            <OrderLine
-              key={line.id}
-              line={line}
-              {...(line.specialRequest === ""
-                ? {}
-                : {
-                    answer: (
-                      <TextArea
-                        {...register(`answers.${line.id}`)}
-                        label="Answer to the special request"
-                        hint="The customer reads it in the e-mail and on the order."
-                        most={500}
-                        defaultValue={start.answers[line.id] ?? ""}
-                        error={formState.errors.answers?.[line.id]?.message}
-                      />
-                    ),
-                  })}
-            />
-          ))}
-        </ul>
-        {children}
-        <section aria-labelledby="decision" className="max-w-form space-y-5 border-t-2 border-ink pt-4">
-          <h2 id="decision" className="text-2xl">
-            Answer the customer
-          </h2>
-          <TextField
-            {...register("promisedShipOn")}
-            label="Ships on, as promised"
-            hint={`Estimated today: ${date(review.proposedShipOn)}. The customer is told this date.`}
-            type="date"
-            className="max-w-60 text-lg numerals"
-            error={formState.errors.promisedShipOn?.message}
-          />
-          {isOwnDate && (
-            <TextField
-              {...register("dateReason")}
-              label="Why not the estimated date"
-              hint="Kept in the order's history."
-              maxLength={300}
-              error={formState.errors.dateReason?.message}
-            />
-          )}
-          <div className="flex flex-wrap gap-3">
-            <Button type="submit" look="main" busy={accept.isPending} busyLabel="Accepting the order">
-              Accept and tell the customer
-            </Button>
-            <Button
-              onClick={() => {
-                setDeclining(true);
-              }}
-            >
-              Decline
-            </Button>
+        <div className="grid gap-x-12 gap-y-10 lg:grid-cols-[1fr_22rem]">
+          <OrderLines order={review} answerTo={answerTo} />
+          <div className="space-y-10">
+            <section aria-labelledby="decision" className="space-y-5">
+              <h2 id="decision" className="text-2xl">
+                Answer the customer
+              </h2>
+              <TextField
+                {...register("promisedShipOn")}
+                label="Ships on, as promised"
+                hint={`Estimated today: ${date(review.proposedShipOn)}. The customer is told this date.`}
+                type="date"
+                className="max-w-60 text-lg numerals"
+                error={formState.errors.promisedShipOn?.message}
+              />
+              {isOwnDate && (
+                <TextField
+                  {...register("dateReason")}
+                  label="Why not the estimated date"
+                  hint="Kept in the order's history."
+                  maxLength={300}
+                  error={formState.errors.dateReason?.message}
+                />
+              )}
+              <div className="space-y-3">
+                <Button
+                  type="submit"
+                  look="main"
+                  wide
+                  busy={accept.isPending}
+                  busyLabel="Accepting the order"
+                >
+                  Accept and tell the customer
+                </Button>
+                <Button
+                  wide
+                  onClick={() => {
+                    setDeclining(true);
+                  }}
+                >
+                  Decline
+                </Button>
+              </div>
+            </section>
+            {children}
           </div>
-        </section>
+        </div>
       </form>
       <DeclineDialog
         review={review}

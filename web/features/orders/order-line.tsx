@@ -9,10 +9,12 @@ interface OrderLineProps {
   line: OrderLineView;
   /** Stands under the special request in place of its answer; for whoever has to give it. */
   answer?: ReactNode;
+  /** Folds what is behind the build away, where several lines stand one under the other. */
+  folded?: boolean;
 }
 
 /** One line of an order: the build, what was asked for besides, and everything behind it. */
-export function OrderLine({ line, answer }: OrderLineProps) {
+export function OrderLine({ line, answer, folded = false }: OrderLineProps) {
   const { build } = line;
   return (
     <li className="border-t-2 border-ink pt-4">
@@ -52,9 +54,26 @@ export function OrderLine({ line, answer }: OrderLineProps) {
         )}
       </dl>
       {answer !== undefined && <div className="mt-3 max-w-form">{answer}</div>}
-      <div className="mt-5">
-        <BuildFacts build={build} />
-      </div>
+      {folded ? (
+        <details className="mt-3">
+          <summary className="inline-flex min-h-target cursor-pointer items-center text-dye underline underline-offset-4 in-data-[place=floor]:min-h-target-floor">
+            {foldName(build)}
+          </summary>
+          <div className="mt-3">
+            <BuildFacts build={build} />
+          </div>
+        </details>
+      ) : (
+        <div className="mt-5">
+          <BuildFacts build={build} />
+        </div>
+      )}
     </li>
   );
+}
+
+function foldName(build: OrderLineView["build"]): string {
+  const cautions = build.findings.filter((finding) => finding.severity !== "note").length;
+  if (cautions === 0) return "Choices, figures and notes";
+  return cautions === 1 ? "Choices, figures and one caution" : `Choices, figures and ${cautions} cautions`;
 }

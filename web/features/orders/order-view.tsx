@@ -4,7 +4,7 @@ import { Notice } from "#web/components/notice.tsx";
 import { date, money } from "#web/lib/format.ts";
 import type { OrderView as Order } from "#shared/contracts/orders.ts";
 import { OrderHistory } from "./order-history.tsx";
-import { OrderLine } from "./order-line.tsx";
+import { OrderLines } from "./order-lines.tsx";
 import { OrderPeople } from "./order-people.tsx";
 import { OrderTitleBlock } from "./order-title-block.tsx";
 import { OrderTotals } from "./order-totals.tsx";
@@ -23,18 +23,7 @@ export function OrderView({ order, timeZone }: OrderViewProps) {
         <Standing order={order} />
       </div>
       <div className="grid gap-x-12 gap-y-10 lg:grid-cols-[1fr_20rem]">
-        <div className="space-y-10">
-          <section aria-labelledby="blocks">
-            <h2 id="blocks" className="mb-4 text-2xl">
-              {order.lines.length === 1 ? "The build" : "The builds"}
-            </h2>
-            <ul className="space-y-10">
-              {order.lines.map((line) => (
-                <OrderLine key={line.id} line={line} />
-              ))}
-            </ul>
-          </section>
-        </div>
+        <OrderLines order={order} />
         <div className="space-y-10">
           <Aside title="What happened">
             <OrderHistory events={order.history} timeZone={timeZone} />

@@ -47,7 +47,7 @@ function columns(timeZone: string): Column<OrderSummary>[] {
           {order.summary}
           {order.openedBy !== null && (
             <span className="mt-1 block">
-              <StatusTag kind="note">Open at {order.openedBy}</StatusTag>
+              <StatusTag kind="note">{order.openedBy} has it open</StatusTag>
             </span>
           )}
         </>
@@ -55,7 +55,11 @@ function columns(timeZone: string): Column<OrderSummary>[] {
     },
     { id: "blocks", header: "Blocks", numeric: true, cell: (order) => order.blocks },
     { id: "marks", header: "To look at", cell: (order) => <Marks order={order} /> },
-    { id: "ships", header: "Ships", cell: (order) => date(order.shipsOn) },
+    {
+      id: "ships",
+      header: "Ships",
+      cell: (order) => <span className="whitespace-nowrap">{date(order.shipsOn)}</span>,
+    },
     { id: "total", header: "Total", numeric: true, cell: (order) => money(order.totalCents) },
   ];
 }
@@ -64,7 +68,7 @@ function columns(timeZone: string): Column<OrderSummary>[] {
 function Marks({ order }: { order: OrderSummary }) {
   if (order.cautions === 0 && !order.hasSpecialRequest) return "\u2013";
   return (
-    <span className="inline-flex flex-col gap-1">
+    <span className="inline-flex flex-col items-start gap-1 max-sm:items-end">
       {order.cautions > 0 && (
         <StatusTag kind="caution">
           {order.cautions === 1 ? "1 caution" : `${order.cautions} cautions`}

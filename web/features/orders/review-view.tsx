@@ -5,7 +5,7 @@ import type { OrderReview } from "#shared/contracts/orders.ts";
 import { Decided } from "./decided.tsx";
 import { DecisionForm } from "./decision-form.tsx";
 import { OrderHistory } from "./order-history.tsx";
-import { OrderLine } from "./order-line.tsx";
+import { OrderLines } from "./order-lines.tsx";
 import { OrderPeople } from "./order-people.tsx";
 import { OrderTitleBlock } from "./order-title-block.tsx";
 import { OrderTotals } from "./order-totals.tsx";
@@ -38,14 +38,10 @@ export function ReviewView({ review, timeZone, mayDecide }: ReviewViewProps) {
       {isOpen && mayDecide ? (
         <DecisionForm review={review}>{facts}</DecisionForm>
       ) : (
-        <>
-          <ul className="space-y-10">
-            {review.lines.map((line) => (
-              <OrderLine key={line.id} line={line} />
-            ))}
-          </ul>
+        <div className="grid gap-x-12 gap-y-10 lg:grid-cols-[1fr_22rem]">
+          <OrderLines order={review} />
           {facts}
-        </>
+        </div>
       )}
     </div>
   );
@@ -53,7 +49,7 @@ export function ReviewView({ review, timeZone, mayDecide }: ReviewViewProps) {
 
 function OrderFacts({ review, timeZone }: Omit<ReviewViewProps, "mayDecide">) {
   return (
-    <div className="grid gap-x-12 gap-y-8 border-t-2 border-ink pt-4 md:grid-cols-2 lg:grid-cols-3">
+    <div className="space-y-8">
       <Part title="Customer">
         <OrderPeople order={review} />
       </Part>

@@ -23,7 +23,7 @@ export function Component() {
   if (order.data !== undefined && session !== undefined) {
     return (
       <div className="space-y-6">
-        <PageHeading over="Order" title={order.data.number} />
+        <PageHeading title={`Order ${order.data.number}`} />
         <OrderView order={order.data} timeZone={session.shop.timeZone} />
       </div>
     );
@@ -32,7 +32,7 @@ export function Component() {
   if (closed) return <Closed number={number} signedIn={(session?.person ?? null) !== null} />;
   return (
     <div className="space-y-8">
-      <PageHeading over="Order" title={number} />
+      <PageHeading title={`Order ${number}`} />
       {order.isError ? (
         <RequestFault error={order.error} onRetry={() => void order.refetch()} retrying={order.isFetching} />
       ) : (
