@@ -87,6 +87,14 @@ function environmentFor({ host, port, origin, cluster, secrets, fakes }) {
   };
 }
 
+/** The answers of all, each waited for even when another failed, so that nothing starts behind a stop's back. */
+async function allOrFirstFailure(promises) {
+  const results = await Promise.allSettled(promises);
+  const failure = results.find((result) => result.status === "rejected");
+  if (failure !== undefined) throw failure.reason;
+  return results.map((result) => result.value);
+}
+
 /** Starts all parts in order and says where they are. */
 async function openShop({
   dataFolder,
@@ -102,12 +110,14 @@ async function openShop({
   const secrets = await secretsOf(dataFolder);
   const ports = await rememberedPorts(dataFolder, ["database", "stripe", "smtp", "mailbox", "server"]);
   say("Starting the database, the stand-ins for payments and mail, and the server ...");
-  const cluster = await startDatabase(databaseFolder, ports.database, secrets.databasePassword);
-  await supervision.watch("database", cluster.pid, cluster.log);
   const server = behindAnother ? { host: "127.0.0.1", port: ports.server } : { host, port };
   const serverOrigin = `http://${behindAnother ? server.host : reachable}:${server.port}`;
   const webhookUrl = `${serverOrigin}${webhookPath}`;
-  const fakes = await startFakes(supervision, { dataFolder, ports, secrets, webhookUrl });
+  const [cluster, fakes] = await allOrFirstFailure([
+    startDatabase(databaseFolder, ports.database, secrets.databasePassword),
+    startFakes(supervision, { dataFolder, ports, secrets, webhookUrl }),
+  ]);
+  await supervision.watch("database", cluster.pid, cluster.log);
   await serve({
     supervision,
     environment: environmentFor({ ...server, origin, cluster, secrets, fakes }),
