@@ -31,12 +31,18 @@ export function optionName(catalogue: Catalogue, choice: string, option: string)
   return options?.find(({ id }) => id === option)?.name ?? option;
 }
 
+/** An option in the middle of a sentence; families have names of their own. */
+function optionInSentence(catalogue: Catalogue, choice: string, option: string): string {
+  const name = optionName(catalogue, choice, option);
+  return choice === "family" ? name : inSentence(name);
+}
+
 /** What the mend's button says: "Also change cap style to four-bolt splayed, +$310, +2 days". */
 export function mendWords(catalogue: Catalogue, mend: Mend, lead = "Also"): string {
   const changes = mend.changes.map(({ choice, to }) =>
     to === null
       ? `drop ${inSentence(choiceName(catalogue, choice))}`
-      : `change ${inSentence(choiceName(catalogue, choice))} to ${inSentence(optionName(catalogue, choice, to))}`,
+      : `change ${inSentence(choiceName(catalogue, choice))} to ${optionInSentence(catalogue, choice, to)}`,
   );
   const effect: string[] = [];
   if (mend.priceCents !== null) {

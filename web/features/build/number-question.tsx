@@ -1,6 +1,7 @@
-import { useState } from "react";
+import { useEffect, useRef, useState } from "react";
 import type { NumberField as Field } from "#shared/catalogue/catalogue.ts";
 import { admitNumber, type Admission } from "#shared/rules/admit-number.ts";
+import { useAnnounce } from "#web/components/announcer.tsx";
 import { NumberField } from "#web/components/text-field.tsx";
 import { useBuildDesk } from "./build-desk.tsx";
 import { mendWords } from "./build-words.ts";
@@ -25,6 +26,14 @@ export function NumberQuestion({ field }: { field: Field }) {
   const [draft, setDraft] = useState<string | null>(null);
   const [refused, setRefused] = useState<(Refusal & { at: typeof evaluation }) | null>(null);
 
+  const box = useRef<HTMLDivElement>(null);
+  const announce = useAnnounce();
+  useEffect(() => {
+    // The reason takes room above the box, which must not slip under the title block while it is typed into.
+    if (refused !== null && box.current?.contains(document.activeElement) === true)
+      box.current.scrollIntoView({ block: "nearest" });
+  }, [refused]);
+
   /** Whether what is typed stands in the build now. */
   const settle = (): boolean => {
     if (draft === null) return refused === null;
@@ -38,6 +47,7 @@ export function NumberQuestion({ field }: { field: Field }) {
     const admission = admitNumber(current, build, field.id, value);
     if (!admission.ok) {
       setRefused({ ...admission, text, at: evaluation });
+      announce(admission.reason.sentence);
       return false;
     }
     setNumber(field.id, value === null ? null : plain(value));
@@ -50,7 +60,7 @@ export function NumberQuestion({ field }: { field: Field }) {
   const standing = refused?.at === evaluation ? refused : null;
   const offer = standing?.mend ?? null;
   return (
-    <div className="max-w-text">
+    <div ref={box} className="max-w-text scroll-my-28">
       <NumberField
         name={field.id}
         label={field.name}

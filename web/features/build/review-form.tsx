@@ -40,6 +40,8 @@ export function ReviewForm() {
   const [sentCents, setSentCents] = useState<number | null>(null);
   const { register, handleSubmit, control, setError, setValue, formState } = useForm({
     resolver: zodResolver(cartFieldsSchema),
+    // The summary takes focus and leads to each field.
+    shouldFocusError: false,
     defaultValues: { engraving, specialRequest: specialRequestDraft(specCode), quantity: 1 },
   });
 

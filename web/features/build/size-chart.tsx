@@ -1,7 +1,9 @@
 import { useMemo, useRef, useState, type KeyboardEvent } from "react";
 import type { Choice } from "#shared/catalogue/catalogue.ts";
 import { evaluate } from "#shared/rules/evaluate.ts";
+import { explain } from "#shared/rules/explain.ts";
 import type { ChoiceState, OptionState } from "#shared/rules/evaluation.ts";
+import { useAnnounce } from "#web/components/announcer.tsx";
 import { classNames } from "#web/components/class-names.ts";
 import { StateMark } from "#web/components/state-mark.tsx";
 import { useBuildDesk, type BuildDesk } from "./build-desk.tsx";
@@ -25,6 +27,7 @@ const arrows: Partial<Record<string, 1 | -1>> = { ArrowDown: 1, ArrowRight: 1, A
 export function SizeChart({ choice, state }: SizeChartProps) {
   const desk = useBuildDesk();
   const { choose } = desk;
+  const announce = useAnnounce();
   const [looked, setLooked] = useState<string | null>(null);
   const [typed, setTyped] = useState("");
   const chart = useRef<HTMLFieldSetElement>(null);
@@ -36,13 +39,13 @@ export function SizeChart({ choice, state }: SizeChartProps) {
   const chosen = state.options.find((option) => option.chosen);
   const inQuestion = state.options.find(({ option }) => option === looked) ?? chosen;
 
-  const reach = (target: OptionState | undefined) => {
+  const reach = (target: OptionState | undefined, lookOnly = false) => {
     if (target === undefined) return;
     setLooked(target.option);
     chart.current
       ?.querySelector<HTMLInputElement>(`[id="${CSS.escape(`${choice.id}-${target.option}`)}"]`)
       ?.focus();
-    if (target.open && !target.chosen) choose(choice.id, target.option);
+    if (target.open && !target.chosen && !lookOnly) choose(choice.id, target.option);
   };
   const press = (event: KeyboardEvent, from: number) => {
     const by = arrows[event.key];
@@ -56,7 +59,8 @@ export function SizeChart({ choice, state }: SizeChartProps) {
       const digits = typed + event.key;
       const found = shown.find(({ option }) => names.get(option)?.startsWith(digits));
       setTyped(found === undefined ? event.key : digits);
-      if (found !== undefined) reach(found);
+      // Several digits make one size: it is looked at, and chosen by the space bar.
+      if (found !== undefined) reach(found, true);
     }
   };
 
@@ -72,8 +76,12 @@ export function SizeChart({ choice, state }: SizeChartProps) {
         sizes={state.options.map(({ option }) => ({ id: option, name: names.get(option) ?? option }))}
         range={shown.map(({ option }) => names.get(option) ?? option)}
         onPick={(option) => {
-          reach(state.options.find((candidate) => candidate.option === option));
-          setLooked(option);
+          const picked = state.options.find((candidate) => candidate.option === option);
+          reach(picked);
+          if (picked?.open === false) {
+            const { sentence } = explain(desk.current, desk.build, { choice: choice.id, option });
+            announce(`${names.get(option) ?? option} is closed. ${sentence}`);
+          }
         }}
       />
       <div className="mt-3 grid grid-cols-[repeat(auto-fill,minmax(4.25rem,1fr))] border-t border-l border-rule">
@@ -84,6 +92,7 @@ export function SizeChart({ choice, state }: SizeChartProps) {
             label={names.get(option.option) ?? option.option}
             state={option}
             effects={optionEffects(desk.current, choice.id, option)}
+            detail={option === inQuestion ? `${choice.id}-detail` : null}
             onLook={() => {
               setLooked(option.option);
             }}
@@ -130,12 +139,14 @@ interface SizeCellProps {
   label: string;
   state: OptionState;
   effects: string[];
+  /** Id of what is said of it under the chart, while it is. */
+  detail: string | null;
   onLook: () => void;
   onChoose: () => void;
   onKey: (event: KeyboardEvent) => void;
 }
 
-function SizeCell({ name, label, state, effects, onLook, onChoose, onKey }: SizeCellProps) {
+function SizeCell({ name, label, state, effects, detail, onLook, onChoose, onKey }: SizeCellProps) {
   const id = `${name}-${state.option}`;
   const price = state.chosen ? [] : effectParts({ ...state.effect, days: null, weight: null });
   return (
@@ -160,7 +171,7 @@ function SizeCell({ name, label, state, effects, onLook, onChoose, onKey }: Size
         value={state.option}
         checked={state.chosen}
         aria-disabled={!state.open}
-        aria-describedby={`${id}-effects`}
+        aria-describedby={detail ?? `${id}-effects`}
         onFocus={onLook}
         onChange={() => {
           if (state.open) onChoose();
