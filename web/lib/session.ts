@@ -7,9 +7,10 @@ import { api, rememberCsrfToken } from "./api.ts";
 export const sessionQuery = queryOptions({
   queryKey: ["session"],
   staleTime: 60_000,
-  queryFn: async ({ signal }): Promise<SessionView> => {
+  // Never cancelled: a guard may wait for the answer while the screen that asked first goes away.
+  queryFn: async (): Promise<SessionView> => {
     const { sessionSchema } = await import("#shared/contracts/session.ts");
-    const session = await api.get("/api/session", sessionSchema, { signal });
+    const session = await api.get("/api/session", sessionSchema);
     rememberCsrfToken(session.csrfToken);
     return session;
   },
