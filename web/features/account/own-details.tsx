@@ -25,7 +25,7 @@ export function OwnDetails({ person }: { person: PersonView }) {
           { label: "Name", value: person.name, wide: true },
           { label: "E-mail", value: person.email, wide: true },
           {
-            label: "Address",
+            label: "E-mail address",
             value: person.emailVerified ? (
               <StatusTag kind="pass">Confirmed</StatusTag>
             ) : (
