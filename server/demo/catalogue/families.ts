@@ -70,7 +70,8 @@ export const families: FamilyDocument[] = [
       inspection: 50,
       pack: 25,
     },
-    leadDays: 0,
+    // Stress relief and ageing of the castings before the first cut; invented for the demo.
+    leadDays: 14,
     facts: [
       {
         name: "Valley",
@@ -110,7 +111,8 @@ export const families: FamilyDocument[] = [
       inspection: 65,
       pack: 25,
     },
-    leadDays: 0,
+    // Stress relief and ageing of the castings before the first cut; invented for the demo.
+    leadDays: 18,
     facts: [
       {
         name: "Valley",
@@ -150,7 +152,8 @@ export const families: FamilyDocument[] = [
       inspection: 75,
       pack: 30,
     },
-    leadDays: 0,
+    // Stress relief and ageing of the castings before the first cut; invented for the demo.
+    leadDays: 25,
     facts: [
       {
         name: "Valley",
