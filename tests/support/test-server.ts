@@ -4,8 +4,6 @@ import { startFakeMail, type FakeMail } from "./fake-mail.ts";
 import { startFakeStripe, type FakeStripe } from "./fake-stripe.ts";
 import { freePort } from "./free-port.ts";
 
-export { startFakeMail, startFakeStripe };
-
 export interface TestServer extends RunningChild {
   origin: string;
   databaseUrl: string;
