@@ -63,6 +63,11 @@ const officePages: RouteObject[] = [
   { path: "/office/messages/:id", lazy: () => import("./routes/office/message.tsx") },
 ];
 
+const whoMayEnter: Record<Place, string> = {
+  floor: "The Floor is for the shop's own people",
+  office: "The Office is for the shop's managers",
+};
+
 /**
  * Sends strangers to sign in and back, and tells others that the door is closed to them.
  * The server guards every record by itself; this spares a walk to an empty page.
@@ -77,7 +82,7 @@ function guard(place: Place | null) {
     if (place !== null && !mayEnter(place, person.role)) {
       throw new ApiProblem({
         type: "/problems/not-allowed",
-        title: "This place is for the shop's own people",
+        title: whoMayEnter[place],
         detail: `You are signed in as ${person.name}, who may not enter it. Ask the office, or sign in as somebody else.`,
         status: 403,
       });

@@ -1,5 +1,6 @@
 import type { ReactNode } from "react";
 import { CautionLine } from "#web/components/caution-line.tsx";
+import { telephone } from "#web/lib/format.ts";
 import { OutsideLink } from "#web/components/text-link.tsx";
 import type { SessionView } from "#shared/contracts/session.ts";
 
@@ -20,7 +21,9 @@ export function SiteFooter({ session }: { session: SessionView | undefined }) {
           </Cell>
           <Cell label="Telephone">
             {shop !== undefined && (
-              <OutsideLink href={`tel:${shop.phone.replace(/[^+\d]/g, "")}`}>{shop.phone}</OutsideLink>
+              <OutsideLink href={`tel:${shop.phone.replace(/[^+\d]/g, "")}`}>
+                {telephone(shop.phone)}
+              </OutsideLink>
             )}
           </Cell>
           <Cell label="E-mail">

@@ -17,12 +17,23 @@ export function moneyChange(cents: number): string {
   return cents > 0 ? `+${money(cents)}` : money(cents);
 }
 
-/** A number to fixed places with a true minus sign, such as 4.125 to 4 places: "4.1250". */
-export function fixed(value: number, places: number): string {
-  const text = Math.abs(value).toLocaleString("en-US", {
+/** Making a formatter costs far more than using it. */
+const byPlaces = new Map<number, Intl.NumberFormat>();
+
+function placed(places: number): Intl.NumberFormat {
+  const known = byPlaces.get(places);
+  if (known !== undefined) return known;
+  const made = new Intl.NumberFormat("en-US", {
     minimumFractionDigits: places,
     maximumFractionDigits: places,
   });
+  byPlaces.set(places, made);
+  return made;
+}
+
+/** A number to fixed places with a true minus sign, such as 4.125 to 4 places: "4.1250". */
+export function fixed(value: number, places: number): string {
+  const text = placed(places).format(Math.abs(value));
   return value < 0 && Number(value.toFixed(places)) !== 0 ? `${minus}${text}` : text;
 }
 
@@ -55,10 +66,16 @@ export function daysChange(days: number): string {
   return `${days > 0 ? "+" : minus}${size} ${size === 1 ? "day" : "days"}`;
 }
 
+const calendarDay = new Intl.DateTimeFormat("en-GB", {
+  day: "numeric",
+  month: "long",
+  year: "numeric",
+  timeZone: "UTC",
+});
+
 /** A calendar date (ISO, no time) as "12 May 2026". */
 export function date(isoDate: string): string {
-  const day = new Date(`${isoDate}T00:00:00Z`);
-  return day.toLocaleDateString("en-GB", { day: "numeric", month: "long", year: "numeric", timeZone: "UTC" });
+  return calendarDay.format(new Date(`${isoDate}T00:00:00Z`));
 }
 
 /** A moment as "12 May 2026, 14:05" on the shop's clock. */
@@ -72,4 +89,10 @@ export function dateTime(isoMoment: string, timeZone: string): string {
   });
   const time = moment.toLocaleTimeString("en-GB", { hour: "2-digit", minute: "2-digit", timeZone });
   return `${day}, ${time}`;
+}
+
+/** "+13135550123" as it is read in the US: "(313) 555-0123". */
+export function telephone(phone: string): string {
+  const parts = /^\+1(\d{3})(\d{3})(\d{4})$/.exec(phone);
+  return parts === null ? phone : `(${parts[1] ?? ""}) ${parts[2] ?? ""}-${parts[3] ?? ""}`;
 }

@@ -69,6 +69,8 @@ export function DecisionForm({ review, children }: DecisionFormProps) {
       {
         onSuccess: () => {
           forget(acceptKeptUnder(review.number));
+          // The button that had focus is gone; the answer stands at the top.
+          document.getElementById("page")?.focus();
           announce(`Order ${review.number} is accepted; it ships on ${date(request.promisedShipOn)}.`);
         },
         onError: (error) => {
@@ -114,7 +116,7 @@ export function DecisionForm({ review, children }: DecisionFormProps) {
                 <TextField
                   {...register("dateReason")}
                   label="Why not the estimated date"
-                  hint="Kept in the order's history."
+                  hint="Kept in the order's history, where the customer reads it too."
                   maxLength={300}
                   error={formState.errors.dateReason?.message}
                 />

@@ -39,6 +39,7 @@ export function DeclineDialog({ review, open, onClose }: DeclineDialogProps) {
       onSuccess: () => {
         onClose();
         forget(acceptKeptUnder(review.number));
+        document.getElementById("page")?.focus();
         announce(`Order ${review.number} is declined; ${money(review.paidCents)} goes back.`);
       },
       onError: (error) => {

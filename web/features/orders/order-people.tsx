@@ -1,12 +1,7 @@
 import { OutsideLink } from "#web/components/text-link.tsx";
+import { telephone } from "#web/lib/format.ts";
 import { usStates } from "#shared/contracts/address.ts";
 import type { OrderView } from "#shared/contracts/orders.ts";
-
-/** "+13135550123" as it is read in the US: "(313) 555-0123". */
-function telephone(phone: string): string {
-  const parts = /^\+1(\d{3})(\d{3})(\d{4})$/.exec(phone);
-  return parts === null ? phone : `(${parts[1] ?? ""}) ${parts[2] ?? ""}-${parts[3] ?? ""}`;
-}
 
 /** Where the order goes, and who ordered it. */
 export function OrderPeople({ order }: { order: OrderView }) {
