@@ -1,8 +1,8 @@
 import { randomUUID } from "node:crypto";
-import { config } from "#server/config.ts";
 import { transaction } from "#server/database/transaction.ts";
 import { enqueue } from "#server/jobs/queue.ts";
 import { Email } from "#server/models/email.ts";
+import { newMessageId } from "./message-id.ts";
 import { type EmailData, type EmailKindName, emailKinds } from "./kinds.ts";
 
 export interface EmailRequest<Kind extends EmailKindName> {
@@ -34,7 +34,7 @@ export async function queueEmail<Kind extends EmailKindName>(request: EmailReque
           data,
           personId: request.personId ?? null,
           orderId: request.orderId ?? null,
-          messageId: `<${id}@${senderDomain()}>`,
+          messageId: newMessageId(),
           eventKey: request.eventKey,
         },
       ],
@@ -43,9 +43,4 @@ export async function queueEmail<Kind extends EmailKindName>(request: EmailReque
     if (written.length > 0 && (await Email.count({ where: { id } })) === 1)
       await enqueue("send-email", { emailId: id });
   });
-}
-
-function senderDomain(): string {
-  const domain = /@([^\s@<>]+)>?\s*$/.exec(config.MAIL_FROM)?.[1];
-  return domain ?? new URL(config.PUBLIC_ORIGIN).hostname;
 }

@@ -19,7 +19,7 @@ export class Email extends Model<InferAttributes<Email>, InferCreationAttributes
   declare orderId: string | null;
   declare personId: string | null;
   declare state: CreationOptional<MessageSummary["state"]>;
-  /** Message-ID header; the same however often it is sent. */
+  /** Message-ID header; the same through every try to send it. */
   declare messageId: string;
   /** One message for one event. */
   declare eventKey: string;

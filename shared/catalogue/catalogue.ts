@@ -114,17 +114,20 @@ export type Expression =
   | { difference: [Expression, Expression] }
   | { product: [Expression, Expression] };
 
-const expressionSchema: z.ZodType<Expression> = z.lazy(() =>
-  z.union([
-    z.strictObject({ constant: z.number() }),
-    z.strictObject({ figure: identifier }),
-    z.strictObject({ value: identifier }),
-    z.strictObject({ number: identifier }),
-    z.strictObject({ sum: z.array(expressionSchema).min(1) }),
-    z.strictObject({ difference: z.tuple([expressionSchema, expressionSchema]) }),
-    z.strictObject({ product: z.tuple([expressionSchema, expressionSchema]) }),
-  ]),
-);
+const expressionSchema: z.ZodType<Expression> = z
+  .lazy(() =>
+    z.union([
+      z.strictObject({ constant: z.number() }),
+      z.strictObject({ figure: identifier }),
+      z.strictObject({ value: identifier }),
+      z.strictObject({ number: identifier }),
+      z.strictObject({ sum: z.array(expressionSchema).min(1) }),
+      z.strictObject({ difference: z.tuple([expressionSchema, expressionSchema]) }),
+      z.strictObject({ product: z.tuple([expressionSchema, expressionSchema]) }),
+    ]),
+  )
+  // Named, since it contains itself and the API document must be able to point at it.
+  .meta({ id: "RuleExpression" });
 
 /** A condition over choices and quantities. A comparison that reads something unknown is undecided. */
 export type Condition =
@@ -135,20 +138,22 @@ export type Condition =
   | { any: Condition[] }
   | { not: Condition };
 
-const conditionSchema: z.ZodType<Condition> = z.lazy(() =>
-  z.union([
-    z.strictObject({ choice: identifier, in: z.array(identifier).min(1) }),
-    z.strictObject({ word: identifier, in: z.array(z.string()).min(1) }),
-    z.strictObject({
-      left: expressionSchema,
-      is: z.enum([">=", "<=", ">", "<", "="]),
-      right: expressionSchema,
-    }),
-    z.strictObject({ all: z.array(conditionSchema).min(1) }),
-    z.strictObject({ any: z.array(conditionSchema).min(1) }),
-    z.strictObject({ not: conditionSchema }),
-  ]),
-);
+const conditionSchema: z.ZodType<Condition> = z
+  .lazy(() =>
+    z.union([
+      z.strictObject({ choice: identifier, in: z.array(identifier).min(1) }),
+      z.strictObject({ word: identifier, in: z.array(z.string()).min(1) }),
+      z.strictObject({
+        left: expressionSchema,
+        is: z.enum([">=", "<=", ">", "<", "="]),
+        right: expressionSchema,
+      }),
+      z.strictObject({ all: z.array(conditionSchema).min(1) }),
+      z.strictObject({ any: z.array(conditionSchema).min(1) }),
+      z.strictObject({ not: conditionSchema }),
+    ]),
+  )
+  .meta({ id: "RuleCondition" });
 
 const ruleBase = {
   id: z.string().regex(/^[a-z][a-z0-9-]*$/),
