@@ -22,9 +22,24 @@ module.exports = {
       from: { path: "^shared/" },
       to: { path: "node_modules", pathNot: "node_modules/zod/" },
     },
-    { name: "web-not-server", severity: "error", from: { path: "^web/" }, to: { path: "^(server|fake-services|tests)/" } },
-    { name: "server-not-web", severity: "error", from: { path: "^server/" }, to: { path: "^(web|fake-services|tests)/" } },
-    { name: "fakes-alone", severity: "error", from: { path: "^fake-services/" }, to: { path: "^(web|server|tests)/" } },
+    {
+      name: "web-not-server",
+      severity: "error",
+      from: { path: "^web/" },
+      to: { path: "^(server|fake-services|tests)/" },
+    },
+    {
+      name: "server-not-web",
+      severity: "error",
+      from: { path: "^server/" },
+      to: { path: "^(web|fake-services|tests)/" },
+    },
+    {
+      name: "fakes-alone",
+      severity: "error",
+      from: { path: "^fake-services/" },
+      to: { path: "^(web|server|tests)/" },
+    },
     {
       name: "features-apart",
       comment: "a feature never imports another feature; routes compose them",

@@ -39,4 +39,3 @@ export type ChangePasswordRequest = z.infer<typeof changePasswordRequestSchema>;
 
 /** The answer to register, forgot and the like: the same whether or not the address is known. */
 export const acknowledgementSchema = z.object({ message: z.string() });
-export type Acknowledgement = z.infer<typeof acknowledgementSchema>;

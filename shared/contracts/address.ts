@@ -102,7 +102,6 @@ export const contactSchema = z.object({
   email: z.string().trim().max(254).pipe(z.email("Write an e-mail address like name@example.com.")),
   phone: phoneSchema,
 });
-export type Contact = z.infer<typeof contactSchema>;
 
 export const deliverySchema = z.discriminatedUnion("method", [
   z.object({ method: z.literal("pick-up") }),

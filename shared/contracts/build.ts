@@ -15,21 +15,20 @@ export const buildRequestSchema = z.object({
 });
 export type BuildRequest = z.infer<typeof buildRequestSchema>;
 
-export const priceLineSchema = z.object({
+const priceLineSchema = z.object({
   kind: z.enum(["base", "option"]),
   label: z.string(),
   amountCents: z.int(),
 });
 
-export const findingViewSchema = z.object({
+const findingViewSchema = z.object({
   rule: z.string(),
   severity: z.enum(["stop", "caution", "note"]),
   sentence: z.string(),
   undecided: z.boolean(),
 });
-export type FindingView = z.infer<typeof findingViewSchema>;
 
-export const figureViewSchema = z.object({
+const figureViewSchema = z.object({
   id: z.string(),
   name: z.string(),
   unit: z.string(),

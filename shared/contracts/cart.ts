@@ -1,7 +1,7 @@
 import { z } from "zod";
 import { buildRequestSchema, buildViewSchema, engravingSchema } from "./build.ts";
 
-export const specialRequestSchema = z.string().trim().max(500, "At most 500 characters.");
+const specialRequestSchema = z.string().trim().max(500, "At most 500 characters.");
 
 export const addCartLineRequestSchema = buildRequestSchema.extend({
   quantity: z.int().min(1, "At least one block.").max(20, "At most 20 blocks on a line.").default(1),
@@ -15,9 +15,8 @@ export type AddCartLineRequest = z.infer<typeof addCartLineRequestSchema>;
 export const changeCartLineRequestSchema = z.object({
   quantity: z.int().min(1, "At least one block.").max(20, "At most 20 blocks on a line."),
 });
-export type ChangeCartLineRequest = z.infer<typeof changeCartLineRequestSchema>;
 
-export const cartLineSchema = z.object({
+const cartLineSchema = z.object({
   id: z.uuid(),
   quantity: z.int(),
   engraving: z.string(),

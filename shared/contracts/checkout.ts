@@ -2,13 +2,12 @@ import { z } from "zod";
 import { contactSchema, deliverySchema } from "./address.ts";
 
 /** One visible line of the total, with its reason in the label. */
-export const totalLineSchema = z.object({
+const totalLineSchema = z.object({
   kind: z.enum(["block", "freight", "tax"]),
   label: z.string(),
   quantity: z.int(),
   amountCents: z.int(),
 });
-export type TotalLine = z.infer<typeof totalLineSchema>;
 
 export const totalsSchema = z.object({
   currency: z.literal("USD"),
@@ -22,7 +21,6 @@ export type Totals = z.infer<typeof totalsSchema>;
 
 /** POST /api/checkout/total: what the cart costs, delivered. */
 export const totalRequestSchema = z.object({ delivery: deliverySchema });
-export type TotalRequest = z.infer<typeof totalRequestSchema>;
 
 /** POST /api/orders: place the order and open the payment page. */
 export const placeOrderRequestSchema = z.object({

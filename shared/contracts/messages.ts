@@ -1,8 +1,8 @@
 import { z } from "zod";
 
-export const messageStateSchema = z.enum(["waiting", "sent"]);
+const messageStateSchema = z.enum(["waiting", "sent"]);
 
-export const messageSummarySchema = z.object({
+const messageSummarySchema = z.object({
   id: z.uuid(),
   kind: z.string(),
   to: z.string(),
@@ -30,7 +30,6 @@ export const messageListSchema = z.object({
   page: z.int(),
   pages: z.int(),
 });
-export type MessageList = z.infer<typeof messageListSchema>;
 
 /** GET /api/messages/:id: the text as sent, its links masked. */
 export const messageSchema = messageSummarySchema.extend({ text: z.string() });

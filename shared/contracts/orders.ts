@@ -21,9 +21,8 @@ export const orderLinkRequestSchema = z.object({
     .max(20, "An order number looks like K7Q4-M2XD."),
   email: emailAddressSchema,
 });
-export type OrderLinkRequest = z.infer<typeof orderLinkRequestSchema>;
 
-export const orderLineSchema = z.object({
+const orderLineSchema = z.object({
   id: z.uuid(),
   quantity: z.int(),
   engraving: z.string(),
@@ -34,7 +33,7 @@ export const orderLineSchema = z.object({
 });
 export type OrderLineView = z.infer<typeof orderLineSchema>;
 
-export const orderEventSchema = z.object({
+const orderEventSchema = z.object({
   id: z.uuid(),
   at: z.iso.datetime(),
   /** What happened, in words for the reader. */
@@ -71,7 +70,7 @@ export const orderReviewSchema = orderSchema.extend({
 });
 export type OrderReview = z.infer<typeof orderReviewSchema>;
 
-export const orderSummarySchema = z.object({
+const orderSummarySchema = z.object({
   number: z.string(),
   state: orderStateSchema,
   placedAt: z.iso.datetime().nullable(),
@@ -100,7 +99,6 @@ export const orderListSchema = z.object({
   page: z.int(),
   pages: z.int(),
 });
-export type OrderList = z.infer<typeof orderListSchema>;
 
 /** GET /api/account/orders */
 export const myOrdersSchema = z.object({

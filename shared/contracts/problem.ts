@@ -15,7 +15,7 @@ export const problemSchema = z.looseObject({
 export type Problem = z.infer<typeof problemSchema>;
 
 /** The last word of a problem's `type`, by which the client tells problems apart. */
-export const problemKinds = [
+const problemKinds = [
   "validation",
   "not-signed-in",
   "not-allowed",

@@ -1,7 +1,7 @@
 import { z } from "zod";
 import { personSchema } from "./person.ts";
 
-export const shopSchema = z.object({
+const shopSchema = z.object({
   name: z.string(),
   email: z.string(),
   phone: z.string(),

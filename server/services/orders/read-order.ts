@@ -17,7 +17,7 @@ export interface OrderRecord {
 }
 
 /** Reads an order by its number; null when there is none. */
-export async function findOrder(number: string): Promise<Order | null> {
+async function findOrder(number: string): Promise<Order | null> {
   return Order.findOne({ where: { number } });
 }
 
