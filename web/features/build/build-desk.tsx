@@ -66,68 +66,70 @@ export function BuildDeskProvider({ current, children }: BuildDeskProviderProps)
   useOutcome(search, evaluation, why);
   useProgressNote(search);
 
-  const { build } = read;
-  const engraving = read.engraving ?? "";
-  const put = (next: Build, words: string, mended: Changed["changes"] | null = null) => {
-    const address = searchOf(catalogue, next, engraving, search);
-    setWhy({ from: search, words });
-    setChanged(mended === null ? null : { changes: mended, search: address });
-    held.put(address);
-  };
-  const withNumber = (id: string, text: string | null): Build => {
-    const others = Object.entries(build.numbers).filter(([name]) => name !== id);
-    return { ...build, numbers: Object.fromEntries(text === null ? others : [...others, [id, text]]) };
-  };
-  const told = (act: (() => void) | null, words: string) =>
-    act === null
-      ? null
-      : () => {
-          setWhy({ from: search, words });
-          act();
-        };
-  const mendedWords = (changes: Changed["changes"]) =>
-    changes
-      .map(({ choice, to }) =>
-        to === null
-          ? `${choiceName(catalogue, choice)} dropped.`
-          : `${choiceName(catalogue, choice)} changed to ${optionName(catalogue, choice, to)}.`,
-      )
-      .join(" ");
+  const desk = useMemo((): BuildDesk => {
+    const { build } = read;
+    const engraving = read.engraving ?? "";
+    const put = (next: Build, words: string, mended: Changed["changes"] | null = null) => {
+      const address = searchOf(catalogue, next, engraving, search);
+      setWhy({ from: search, words });
+      setChanged(mended === null ? null : { changes: mended, search: address });
+      held.put(address);
+    };
+    const withNumber = (id: string, text: string | null): Build => {
+      const others = Object.entries(build.numbers).filter(([name]) => name !== id);
+      return { ...build, numbers: Object.fromEntries(text === null ? others : [...others, [id, text]]) };
+    };
+    const told = (act: (() => void) | null, words: string) =>
+      act === null
+        ? null
+        : () => {
+            setWhy({ from: search, words });
+            act();
+          };
+    const mendedWords = (changes: Changed["changes"]) =>
+      changes
+        .map(({ choice, to }) =>
+          to === null
+            ? `${choiceName(catalogue, choice)} dropped.`
+            : `${choiceName(catalogue, choice)} changed to ${optionName(catalogue, choice, to)}.`,
+        )
+        .join(" ");
 
-  const desk: BuildDesk = {
-    current,
-    search,
-    build,
-    engraving,
-    evaluation,
-    problems: read.problems.map(({ message }) => message),
-    changed: changed?.search === search ? changed : null,
-    choose(choice, option) {
-      if (build.answers[choice] === option) return;
-      const answers = { ...build.answers, [choice]: option };
-      put({ ...build, answers: choice === "family" ? onlyOptionsFilled(current, answers) : answers }, "");
-    },
-    chooseWithMend(wanted, mend) {
-      const answers = mended({ ...build.answers, [wanted.choice]: wanted.option }, mend);
-      put({ ...build, answers }, mendedWords(mend.changes), mend.changes);
-    },
-    setNumber(id, text) {
-      if ((build.numbers[id] ?? null) !== text) put(withNumber(id, text), "");
-    },
-    setNumberWithMend(id, text, mend) {
-      const next = withNumber(id, text);
-      put({ ...next, answers: mended(next.answers, mend) }, mendedWords(mend.changes), mend.changes);
-    },
-    setEngraving(text) {
-      setWhy(null);
-      held.put(searchOf(catalogue, build, text, search), true);
-    },
-    forgetChanged() {
-      setChanged(null);
-    },
-    undo: told(held.undo, "Undone."),
-    redo: told(held.redo, "Done again."),
-  };
+    return {
+      current,
+      search,
+      build,
+      engraving,
+      evaluation,
+      problems: read.problems.map(({ message }) => message),
+      changed: changed?.search === search ? changed : null,
+      choose(choice, option) {
+        if (build.answers[choice] === option) return;
+        const answers = { ...build.answers, [choice]: option };
+        put({ ...build, answers: choice === "family" ? onlyOptionsFilled(current, answers) : answers }, "");
+      },
+      chooseWithMend(wanted, mend) {
+        const answers = mended({ ...build.answers, [wanted.choice]: wanted.option }, mend);
+        put({ ...build, answers }, mendedWords(mend.changes), mend.changes);
+      },
+      setNumber(id, text) {
+        if ((build.numbers[id] ?? null) !== text) put(withNumber(id, text), "");
+      },
+      setNumberWithMend(id, text, mend) {
+        const next = withNumber(id, text);
+        put({ ...next, answers: mended(next.answers, mend) }, mendedWords(mend.changes), mend.changes);
+      },
+      setEngraving(text) {
+        setWhy(null);
+        held.put(searchOf(catalogue, build, text, search), true);
+      },
+      forgetChanged() {
+        setChanged(null);
+      },
+      undo: told(held.undo, "Undone."),
+      redo: told(held.redo, "Done again."),
+    };
+  }, [catalogue, changed, current, evaluation, held, read, search]);
   return <DeskContext value={desk}>{children}</DeskContext>;
 }
 
@@ -171,6 +173,12 @@ function useOutcome(search: string, evaluation: Evaluation, why: Why | null): vo
 function useProgressNote(search: string): void {
   const { pathname } = useLocation();
   useEffect(() => {
-    if (search !== "") noteBuildInProgress(`${pathname}${search}`);
+    if (search === "") return;
+    const timer = setTimeout(() => {
+      noteBuildInProgress(`${pathname}${search}`);
+    }, 0);
+    return () => {
+      clearTimeout(timer);
+    };
   }, [pathname, search]);
 }

@@ -1,5 +1,5 @@
-import { useEffect, useState } from "react";
-import { NavigationType, useLocation, useNavigate, useNavigationType } from "react-router-dom";
+import { useDeferredValue, useEffect, useMemo, useState } from "react";
+import { NavigationType, useLocation, useNavigate, useNavigation, useNavigationType } from "react-router-dom";
 import { sameSearch } from "./build-address.ts";
 import { readVisit, writeVisit } from "./visit-store.ts";
 
@@ -57,7 +57,7 @@ export interface HeldBuild {
  */
 export function useHeldBuild(): HeldBuild {
   const location = useLocation();
-  const navigation = useNavigationType();
+  const arrival = useNavigationType();
   const navigate = useNavigate();
   const [held, setHeld] = useState<Held>(() => ({
     search: location.search,
@@ -67,7 +67,7 @@ export function useHeldBuild(): HeldBuild {
 
   if (held.entry !== location.key) {
     const other =
-      navigation !== NavigationType.Pop &&
+      arrival !== NavigationType.Pop &&
       !isMirror(location.state) &&
       !sameSearch(location.search, held.search);
     setHeld({
@@ -76,52 +76,43 @@ export function useHeldBuild(): HeldBuild {
     });
   }
 
-  const { pathname, search: shown } = location;
+  // The address bar, and what is kept for this visit, can wait until the change is on the screen; by then a step that was
+  // left for another one in the same breath is behind us.
+  const settled = useDeferredValue(held);
+  const idle = useNavigation().state === "idle";
+  const { pathname, search: shown, key } = location;
   useEffect(() => {
-    if (held.entry !== location.key || sameSearch(held.search, shown)) return;
+    if (!idle || settled.entry !== key || sameSearch(settled.search, shown)) return;
     void navigate(
-      { pathname, search: held.search },
+      { pathname, search: settled.search },
       { replace: true, preventScrollReset: true, state: mirror },
     );
-  }, [held, location.key, pathname, shown, navigate]);
+  }, [settled, idle, key, pathname, shown, navigate]);
 
   useEffect(() => {
-    keepTrail(held);
-  }, [held]);
+    keepTrail(settled);
+  }, [settled]);
 
-  const earlier = held.past.at(-1);
-  const later = held.future[0];
-  return {
-    search: held.search,
-    put(search, silently = false) {
-      setHeld((before) => {
-        if (sameSearch(before.search, search)) return before;
-        return silently ? { ...before, search } : advanced(before, search);
-      });
-    },
-    undo:
-      earlier === undefined
+  const { search, past, future } = held;
+  return useMemo(() => {
+    const step = (to: string | undefined, next: Trail) =>
+      to === undefined
         ? null
         : () => {
-            setHeld((before) => ({
-              ...before,
-              search: earlier,
-              past: before.past.slice(0, -1),
-              future: [before.search, ...before.future],
-            }));
-          },
-    redo:
-      later === undefined
-        ? null
-        : () => {
-            setHeld((before) => ({
-              ...before,
-              search: later,
-              past: [...before.past, before.search],
-              future: before.future.slice(1),
-            }));
-          },
-  };
+            setHeld((before) => ({ ...before, ...next, search: to }));
+          };
+    return {
+      search,
+      put(put: string, silently = false) {
+        setHeld((before) => {
+          if (sameSearch(before.search, put)) return before;
+          return silently ? { ...before, search: put } : advanced(before, put);
+        });
+      },
+      undo: step(past.at(-1), { past: past.slice(0, -1), future: [search, ...future] }),
+      redo: step(future[0], { past: [...past, search], future: future.slice(1) }),
+    };
+  }, [search, past, future]);
 }
 
 function advanced(before: Held, search: string): Held {
