@@ -11,7 +11,9 @@ const databaseCodes: Record<string, string> = {
 /** One sentence for whoever started the process and must mend it; a fault of our own keeps its trace. */
 export function startSentence(error: unknown): string {
   if (!(error instanceof Error)) return String(error);
-  const code = "code" in error && typeof error.code === "string" ? error.code : "";
+  // Sequelize keeps the database's own error within its own.
+  const cause: unknown = "original" in error ? error.original : error;
+  const code = cause instanceof Error && "code" in cause && typeof cause.code === "string" ? cause.code : "";
   if (error.name === "ConfigurationError" || error.name === "StartRefused") return error.message;
   if (code === "EADDRINUSE" && "port" in error)
     return `Port ${String(error.port)} is in use; set PORT to another one or stop what listens there.`;

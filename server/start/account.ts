@@ -6,9 +6,9 @@ import { newPasswordSchema } from "#shared/contracts/account.ts";
 import { emailAddressSchema, personNameSchema, roleSchema } from "#shared/contracts/person.ts";
 
 /**
- * Makes an account from the command line, for the first person of a shop: npm run account -- create office
- * It asks for what ACCOUNT_NAME, ACCOUNT_EMAIL and ACCOUNT_PASSWORD do not say. A password is never an argument,
- * where every user of the machine could read it.
+ * Accounts from the command line: `npm run account -- create office` for the first person of a shop, and
+ * `npm run account -- disable name@shop.example` to shut one. Creating asks for what ACCOUNT_NAME, ACCOUNT_EMAIL and
+ * ACCOUNT_PASSWORD do not say; a password is never an argument, where every user of the machine could read it.
  */
 const wantedSchema = z.object({
   name: personNameSchema,
@@ -17,7 +17,8 @@ const wantedSchema = z.object({
   role: roleSchema,
 });
 
-const usage = `Say: npm run account -- create ${roleSchema.options.join("|")}`;
+const usage = `Say: npm run account -- create ${roleSchema.options.join("|")}
+ or: npm run account -- disable name@shop.example`;
 
 async function ask(question: string, hidden = false): Promise<string> {
   let muted = false;
@@ -38,10 +39,9 @@ async function ask(question: string, hidden = false): Promise<string> {
   }
 }
 
-async function run(): Promise<void> {
-  const [verb, role] = process.argv.slice(2);
+async function create(role: string | undefined): Promise<string> {
   const parsedRole = roleSchema.safeParse(role);
-  if (verb !== "create" || !parsedRole.success) throw new Error(usage);
+  if (!parsedRole.success) throw new Error(usage);
   const answers = {
     role: parsedRole.data,
     name: process.env["ACCOUNT_NAME"] ?? (await ask("Name: ")),
@@ -50,23 +50,37 @@ async function run(): Promise<void> {
   };
   const wanted = wantedSchema.safeParse(answers);
   if (!wanted.success) throw new Error(wanted.error.issues.map((issue) => issue.message).join(" "));
-
+  // Loaded here: only now is the environment needed.
   const { checkNewPassword } = await import("#server/services/accounts/passwords.ts");
   const { createPerson } = await import("#server/services/accounts/create-person.ts");
+  await checkNewPassword(wanted.data.password, wanted.data, "password");
+  await createPerson(wanted.data);
+  return `${wanted.data.email} may sign in as ${wanted.data.role}.`;
+}
+
+async function disable(email: string | undefined): Promise<string> {
+  if (email === undefined) throw new Error(usage);
+  const { disablePerson } = await import("#server/services/accounts/disable-person.ts");
+  const { findPersonByEmail } = await import("#server/services/accounts/find-person.ts");
+  const person = await findPersonByEmail(email);
+  if (!person) throw new Error(`There is no account with the address ${email}.`);
+  await disablePerson(person.id);
+  return `The account of ${person.email} is shut; its sessions have ended.`;
+}
+
+async function run(): Promise<void> {
+  const [verb, argument] = process.argv.slice(2);
+  if (verb !== "create" && verb !== "disable") throw new Error(usage);
+  const done = verb === "create" ? await create(argument) : await disable(argument);
   const { sequelize } = await import("#server/database/connection.ts");
-  try {
-    await checkNewPassword(wanted.data.password, wanted.data, "password");
-    await createPerson(wanted.data);
-  } finally {
-    await sequelize.close();
-  }
-  process.stdout.write(`${wanted.data.email} may sign in as ${wanted.data.role}.\n`);
+  await sequelize.close();
+  process.stdout.write(`${done}\n`);
 }
 
 try {
   await run();
 } catch (error) {
-  const isOurs = error instanceof Error && (error.name === "Error" || error.name === "Refusal");
+  const isOurs = error instanceof Error && ["Error", "Refusal"].includes(error.name) && !("code" in error);
   process.stderr.write(`${isOurs ? error.message : startSentence(error)}\n`);
-  process.exitCode = 1;
+  process.exit(1);
 }

@@ -10,7 +10,7 @@ export interface ProgramResult {
 }
 
 /** Runs Node.js with these arguments in the checkout until it ends. */
-function runNode(args: string[], env: NodeJS.ProcessEnv = process.env): Promise<ProgramResult> {
+export function runNode(args: string[], env: NodeJS.ProcessEnv = process.env): Promise<ProgramResult> {
   return new Promise((settle, reject) => {
     const child = spawn(process.execPath, args, { cwd: checkout, env, stdio: ["ignore", "pipe", "pipe"] });
     let stdout = "";
