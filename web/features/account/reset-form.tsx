@@ -3,6 +3,7 @@ import { useForm } from "react-hook-form";
 import type { z } from "zod";
 import { Button } from "#web/components/button.tsx";
 import { ErrorSummary } from "#web/components/error-summary.tsx";
+import { TextLink } from "#web/components/text-link.tsx";
 import { formErrors, showRefusal } from "#web/lib/form-errors.ts";
 import { resetRequestSchema } from "#shared/contracts/account.ts";
 import { PasswordField } from "./password-field.tsx";
@@ -45,9 +46,16 @@ export function ResetForm({ token, onReset }: ResetFormProps) {
         autoComplete="new-password"
         error={formState.errors.password?.message}
       />
-      <Button type="submit" look="main" busy={reset.isPending} busyLabel="Setting the password">
-        Set the new password
-      </Button>
+      <div className="flex flex-wrap items-center gap-x-6 gap-y-3">
+        <Button type="submit" look="main" busy={reset.isPending} busyLabel="Setting the password">
+          Set the new password
+        </Button>
+        {reset.isError && (
+          <TextLink to="/account/forgot" className="inline-flex min-h-target items-center">
+            Send a new link
+          </TextLink>
+        )}
+      </div>
     </form>
   );
 }
