@@ -54,7 +54,7 @@ export function MessageDetail({ message, timeZone }: MessageDetailProps) {
       {sendAgain.isError && <RequestFault error={sendAgain.error} />}
       {sendAgain.isSuccess && (
         <Notice kind="pass" title="On its way again">
-          Links in it are made anew; the older ones of this message end.
+          Any link in it is made anew; the one before it ends.
         </Notice>
       )}
       <div>
