@@ -47,7 +47,7 @@ const settingsSchema = z
 export type Config = z.infer<typeof settingsSchema>;
 
 /** What is wrong with the environment, in one sentence. */
-export class ConfigurationError extends Error {
+class ConfigurationError extends Error {
   override readonly name = "ConfigurationError";
 }
 

@@ -24,7 +24,7 @@ export const isSecure = new URL(config.PUBLIC_ORIGIN).protocol === "https:";
 /** The browser itself holds a __Host- cookie to this host and to https. */
 export const cookieName = (name: string): string => (isSecure ? `__Host-${name}` : name);
 
-export const sessionCookie = cookieName("blockwright-session");
+const sessionCookie = cookieName("blockwright-session");
 
 const HOUR = 3_600_000;
 const DAY = 24 * HOUR;

@@ -22,5 +22,3 @@ export function hasRole(actor: Actor, roles: readonly Role[]): boolean {
   const { person } = actor;
   return person !== null && roles.some((role) => includes[person.role].includes(role));
 }
-
-export const isStaff = (actor: Actor): boolean => hasRole(actor, ["floor"]);

@@ -6,7 +6,7 @@ import type { BrowserSession } from "#server/middleware/browser-session.ts";
 import { RequestMismatch } from "#server/middleware/request-mismatch.ts";
 import type { ProblemKind } from "#shared/contracts/problem.ts";
 
-export type Method = "get" | "post" | "patch" | "delete";
+type Method = "get" | "post" | "patch" | "delete";
 
 type Caching = "never" | "revalidate" | "forever";
 
@@ -19,15 +19,11 @@ export class Answer {
   }
 }
 
-/** Sends the browser on to an address of our own. */
-export const redirectTo = (path: `/${string}`): Answer =>
-  new Answer((response) => response.redirect(303, path));
-
 type Shape = z.ZodType | undefined;
 type Read<Schema extends Shape> = Schema extends z.ZodType ? z.output<Schema> : undefined;
 type Written<Schema extends Shape> = Schema extends z.ZodType ? z.input<Schema> : void;
 
-export interface Asked<Params, Query, Body> {
+interface Asked<Params, Query, Body> {
   params: Params;
   query: Query;
   body: Body;

@@ -45,7 +45,7 @@ function asObject(schema: z.ZodType | undefined): z.ZodObject | undefined {
 }
 
 /** The OpenAPI 3.1 document of these routes, made from the very schemas that they parse with. */
-export function openApiDocument(routes: readonly Route[]): object {
+function openApiDocument(routes: readonly Route[]): object {
   const registry = new OpenAPIRegistry();
   for (const route of routes) {
     const params = asObject(route.params);
