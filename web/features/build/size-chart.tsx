@@ -1,4 +1,4 @@
-import { useMemo, useRef, useState, type KeyboardEvent } from "react";
+import { useMemo, useState, type KeyboardEvent } from "react";
 import type { Choice } from "#shared/catalogue/catalogue.ts";
 import { evaluate } from "#shared/rules/evaluate.ts";
 import { explain } from "#shared/rules/explain.ts";
@@ -30,7 +30,6 @@ export function SizeChart({ choice, state }: SizeChartProps) {
   const announce = useAnnounce();
   const [looked, setLooked] = useState<string | null>(null);
   const [typed, setTyped] = useState("");
-  const chart = useRef<HTMLFieldSetElement>(null);
   const made = useMadeInFamily(desk, choice.id);
   const shown = state.options.filter((option) => option.chosen || made === null || made.has(option.option));
   const elsewhere = state.options.length - shown.length;
@@ -42,9 +41,7 @@ export function SizeChart({ choice, state }: SizeChartProps) {
   const reach = (target: OptionState | undefined, lookOnly = false) => {
     if (target === undefined) return;
     setLooked(target.option);
-    chart.current
-      ?.querySelector<HTMLInputElement>(`[id="${CSS.escape(`${choice.id}-${target.option}`)}"]`)
-      ?.focus();
+    document.getElementById(`${choice.id}-${target.option}`)?.focus();
     if (target.open && !target.chosen && !lookOnly) choose(choice.id, target.option);
   };
   const press = (event: KeyboardEvent, from: number) => {
@@ -65,7 +62,7 @@ export function SizeChart({ choice, state }: SizeChartProps) {
   };
 
   return (
-    <fieldset ref={chart} aria-describedby={`${choice.id}-hint`}>
+    <fieldset aria-describedby={`${choice.id}-hint`}>
       <legend className="font-condensed text-xl font-semibold">{choice.question}</legend>
       <div id={`${choice.id}-hint`} className="mt-1 max-w-text text-iron">
         <ChoiceHelp choice={choice} single={shown.length === 1} />
