@@ -16,6 +16,7 @@ const kinds: Record<ProblemKind, { status: number; title: string }> = {
   "price-changed": { status: 409, title: "The price has changed" },
   "build-refused": { status: 422, title: "This build cannot be made" },
   "payment-closed": { status: 409, title: "Paid already" },
+  "bad-signature": { status: 400, title: "The signature does not fit" },
   "gateway-unavailable": { status: 503, title: "A service we depend on does not answer" },
   "too-large": { status: 413, title: "Too large" },
   internal: { status: 500, title: "Something went wrong here" },

@@ -48,8 +48,16 @@ export const orderRoutes = [
     body: placeOrderRequestSchema,
     response: placedOrderSchema,
     status: 201,
-    problems: ["build-refused", "price-changed", "payment-closed", "conflict", "gateway-unavailable"],
-    handle: async ({ actor, body, session }) => {
+    problems: [
+      "build-refused",
+      "price-changed",
+      "payment-closed",
+      "conflict",
+      "gateway-unavailable",
+      "too-many-requests",
+    ],
+    handle: async ({ actor, body, session, request }) => {
+      await countTry("order by address", request.ip ?? "");
       const { orderId, ...placed } = await placeOrder(holderOf(actor), body);
       if (actor.person === null) session.grantOrder(orderId);
       return placed;

@@ -16,6 +16,7 @@ const limits = {
   "confirmation by account": { points: 5, duration: HOUR },
   "token by address": { points: 60, duration: HOUR },
   "password by account": { points: 10, duration: 15 * MINUTE },
+  "order by address": { points: 200, duration: HOUR },
   "order link by address": { points: 30, duration: HOUR },
 } as const;
 

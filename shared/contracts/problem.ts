@@ -26,6 +26,7 @@ const problemKinds = [
   "price-changed",
   "build-refused",
   "payment-closed",
+  "bad-signature",
   "gateway-unavailable",
   "too-large",
   "internal",

@@ -117,6 +117,39 @@ describe("the server's own word on builds and prices", () => {
   });
 });
 
+describe("the payment service's door", () => {
+  const event = JSON.stringify({
+    id: "evt_made_up",
+    object: "event",
+    type: "checkout.session.completed",
+    data: {},
+  });
+  const knock = (signature: string | null) =>
+    fetch(`${shop.origin}/api/stripe-webhook`, {
+      method: "POST",
+      headers: {
+        "Content-Type": "application/json",
+        ...(signature === null ? {} : { "Stripe-Signature": signature }),
+      },
+      body: event,
+    });
+
+  it.each([
+    ["no signature", null],
+    ["a made-up one", `t=${Math.floor(Date.now() / 1000)},v1=${"0".repeat(64)}`],
+    ["nonsense", "hello"],
+  ])("refuses %s", async (_what, signature) => {
+    const reply = await knock(signature);
+    expect(reply.status).toBe(400);
+    expect(reply.headers.get("content-type")).toContain("application/problem+json");
+  });
+
+  it("does not open for a browser's session instead of a signature", async () => {
+    const visitor = new Visitor(shop.origin);
+    expect((await visitor.post("/api/stripe-webhook", JSON.parse(event))).status).toBe(400);
+  });
+});
+
 describe("the shop's queue", () => {
   it("shows paid orders only, oldest first, and finds them", async () => {
     const waiting = new Visitor(shop.origin);

@@ -6,7 +6,7 @@ import { receiveStripeEvent } from "./receive-stripe-event.ts";
 /**
  * Checks a webhook's signature over its raw bytes and acts on it.
  * @returns what came of it
- * @throws Refusal validation for a bad signature; whatever acting throws, so that Stripe sends it again
+ * @throws Refusal bad-signature; whatever acting throws, so that Stripe sends it again
  */
 export async function receiveWebhook(rawBody: Buffer, signature: string): Promise<string> {
   return receiveStripeEvent(verified(rawBody, signature));
@@ -16,7 +16,8 @@ function verified(rawBody: Buffer, signature: string): StripeEvent {
   try {
     return paymentGateway.readWebhook(rawBody, signature);
   } catch (error) {
-    if (error instanceof WebhookSignatureError) throw new Refusal("validation", "The signature does not fit.");
+    if (error instanceof WebhookSignatureError)
+      throw new Refusal("bad-signature", "Sign the bytes as they are sent, with the secret of this address.");
     throw error;
   }
 }
