@@ -44,6 +44,17 @@ it("starts at the first step, takes choices into the address and goes on by Ente
   expect(screen.getByText(/^Price \$2,940\.00; ships/)).toBeDefined();
 });
 
+it("changes the family freely while nothing was chosen that the other lacks", async () => {
+  const { router, user } = openBuild(`/build/casting?spec=${specOf({ duty: "drag" })}`);
+  await user.click(await radio(/^Marl/));
+  expect((await radio(/^9\.025/)).checked).toBe(true);
+  expect((await radio(/^Gneiss/)).getAttribute("aria-disabled")).toBe("false");
+  await user.click(await radio(/^Gneiss/));
+  await waitFor(() => {
+    expect(answersIn(router)).toEqual({ duty: "drag", family: "gneiss", mainSize: "m2750" });
+  });
+});
+
 it("keeps the build over Back and Forward, and undoes options without moving", async () => {
   const { router, user } = openBuild("/build/duty");
   await user.click(await radio(/^Street/));

@@ -1,6 +1,7 @@
 import type { Build } from "#shared/catalogue/build.ts";
 import { buildToSearch } from "#shared/catalogue/build-address.ts";
 import type { Catalogue } from "#shared/catalogue/catalogue.ts";
+import { onlyOptionsFilled } from "./only-options.ts";
 
 const ownKeys = new Set(["spec", "mine", "engraving"]);
 
@@ -23,8 +24,8 @@ export function stepPath(step: string): string {
   return `/build/${step}`;
 }
 
-/** Address of a fresh build with nothing answered but its family. */
+/** Address of a fresh build with nothing answered but its family, and what is no question in it. */
 export function familyAddress(catalogue: Catalogue, family: string): string {
-  const build: Build = { answers: { family }, numbers: {}, mine: [] };
+  const build: Build = { answers: onlyOptionsFilled(catalogue, { family }), numbers: {}, mine: [] };
   return `${stepPath(catalogue.steps[0]?.id ?? "review")}${searchOf(catalogue, build, "")}`;
 }

@@ -11,6 +11,7 @@ import { searchOf } from "./build-address.ts";
 import { noteBuildInProgress } from "./build-in-progress.ts";
 import { choiceName, optionName, outcomeWords } from "./build-words.ts";
 import { useHeldBuild } from "./held-build.ts";
+import { onlyOptionsFilled, onlyOptionsFreed } from "./only-options.ts";
 
 /** What a mend did besides the wanted option itself; `to` is null where an answer was dropped. */
 export interface Changed {
@@ -24,6 +25,11 @@ export interface BuildDesk {
   build: Build;
   engraving: string;
   evaluation: Evaluation;
+  /**
+   * The evaluation by which the options of a choice are offered. For the family it leaves out the answers that are no
+   * choice in the present family, so that they never stand against another one.
+   */
+  evaluationFor: (choice: string) => Evaluation;
   /** Sentences about parts of the address that could not be read. */
   problems: string[];
   /** What the last mend changed; null once anything else was done. */
@@ -69,8 +75,13 @@ export function BuildDeskProvider({ current, children }: BuildDeskProviderProps)
   const desk = useMemo((): BuildDesk => {
     const { build } = read;
     const engraving = read.engraving ?? "";
+    let freed: Evaluation | null = null;
+    const withoutOnlyOptions = (): Evaluation =>
+      (freed ??= evaluate(current, { ...build, answers: onlyOptionsFreed(catalogue, build.answers) }));
     const put = (next: Build, words: string, mended: Changed["changes"] | null = null) => {
-      const address = searchOf(catalogue, next, engraving, search);
+      const moved = next.answers["family"] !== build.answers["family"];
+      const answers = moved ? onlyOptionsFilled(catalogue, next.answers) : next.answers;
+      const address = searchOf(catalogue, { ...next, answers }, engraving, search);
       setWhy({ from: search, words });
       setChanged(mended === null ? null : { changes: mended, search: address });
       held.put(address);
@@ -101,16 +112,21 @@ export function BuildDeskProvider({ current, children }: BuildDeskProviderProps)
       build,
       engraving,
       evaluation,
+      evaluationFor: (choice) => (choice === "family" ? withoutOnlyOptions() : evaluation),
       problems: read.problems.map(({ message }) => message),
       changed: changed?.search === search ? changed : null,
       choose(choice, option) {
         if (build.answers[choice] === option) return;
-        const answers = { ...build.answers, [choice]: option };
-        put({ ...build, answers: choice === "family" ? onlyOptionsFilled(current, answers) : answers }, "");
+        const answers = choice === "family" ? withoutOnlyOptions().build.answers : build.answers;
+        put({ ...build, answers: { ...answers, [choice]: option } }, "");
       },
       chooseWithMend(wanted, mend) {
-        const answers = mended({ ...build.answers, [wanted.choice]: wanted.option }, mend);
-        put({ ...build, answers }, mendedWords(mend.changes), mend.changes);
+        const answers = wanted.choice === "family" ? withoutOnlyOptions().build.answers : build.answers;
+        put(
+          { ...build, answers: mended({ ...answers, [wanted.choice]: wanted.option }, mend) },
+          mendedWords(mend.changes),
+          mend.changes,
+        );
       },
       setNumber(id, text) {
         if ((build.numbers[id] ?? null) !== text) put(withNumber(id, text), "");
@@ -138,17 +154,6 @@ function mended(answers: Build["answers"], mend: Mend): Build["answers"] {
   const kept = Object.entries(answers).filter(([choice]) => !changed.has(choice));
   const replaced = [...changed].flatMap(([choice, to]) => (to === null ? [] : [[choice, to] as const]));
   return Object.fromEntries([...kept, ...replaced]);
-}
-
-/** With the family chosen, a choice that has one option in it is no question any more. */
-function onlyOptionsFilled({ catalogue }: CurrentCatalogue, answers: Build["answers"]): Build["answers"] {
-  const filled = { ...answers };
-  for (const { id, options } of catalogue.choices) {
-    const made = options.filter(({ families }) => families?.includes(answers["family"] ?? "") !== false);
-    const [only] = made;
-    if (made.length === 1 && only !== undefined) filled[id] ??= only.id;
-  }
-  return filled;
 }
 
 /** What is to be said of the change that is being made, and of which build it was made. */

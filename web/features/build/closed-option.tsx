@@ -18,9 +18,12 @@ interface Settled {
 }
 
 /** The build as it stood when there was last time to think about it; null at first. */
-function useSettled(): Settled | null {
-  const { current, evaluation } = useBuildDesk();
-  const now = useMemo(() => ({ context: current, evaluation }), [current, evaluation]);
+function useSettled(choice: string): Settled | null {
+  const { current, evaluationFor } = useBuildDesk();
+  const now = useMemo(
+    () => ({ context: current, evaluation: evaluationFor(choice) }),
+    [current, evaluationFor, choice],
+  );
   return useDeferredValue(now, null);
 }
 
@@ -31,7 +34,7 @@ function isClosed({ evaluation }: Settled, { choice, option }: Wanted): boolean 
 
 /** One line: what stands against a closed option. */
 export function ClosedReason({ choice, option }: Wanted) {
-  const settled = useSettled();
+  const settled = useSettled(choice);
   const sentence = useMemo(() => {
     if (settled === null || !isClosed(settled, { choice, option })) return null;
     return explain(settled.context, settled.evaluation.build, { choice, option }).sentence;
@@ -42,7 +45,7 @@ export function ClosedReason({ choice, option }: Wanted) {
 /** The button that lets a closed option in and changes what stands against it; nothing where no mend exists. */
 export function MendButton({ choice, option, lead }: Wanted & { lead?: string }) {
   const { current, chooseWithMend } = useBuildDesk();
-  const settled = useSettled();
+  const settled = useSettled(choice);
   const found = useMemo(
     () =>
       settled === null || !isClosed(settled, { choice, option })

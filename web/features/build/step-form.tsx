@@ -17,7 +17,7 @@ import { stepOf } from "./what-is-missing.tsx";
 
 /** One step of the form. Enter goes on to the next; nothing has to be answered before. */
 export function StepForm({ step }: { step: Step }) {
-  const { current, evaluation, build, problems, search } = useBuildDesk();
+  const { current, evaluationFor, build, problems, search } = useBuildDesk();
   const navigate = useNavigate();
   const { catalogue } = current;
   const position = catalogue.steps.indexOf(step);
@@ -64,7 +64,7 @@ export function StepForm({ step }: { step: Step }) {
           </div>
           {step.choices.map((id) => {
             const choice = catalogue.choices.find((candidate) => candidate.id === id);
-            const state = evaluation.choices.find((candidate) => candidate.choice === id);
+            const state = evaluationFor(id).choices.find((candidate) => candidate.choice === id);
             if (choice === undefined || state === undefined) return null;
             return (
               <div key={id} id={id} className="scroll-mt-4">
