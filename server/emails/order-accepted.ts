@@ -1,4 +1,5 @@
-import { blockRows, liftingCaution, longDate, orderEmailSchema } from "./order-email.ts";
+import { longDate } from "#shared/units/date-text.ts";
+import { blockRows, liftingCaution, orderEmailSchema } from "./order-email.ts";
 import { defineEmail } from "./email-kind.ts";
 import type { LetterPart } from "./letter.ts";
 

@@ -32,27 +32,6 @@ export type OrderEmailData = z.infer<typeof orderEmailSchema>;
 export type OrderEmailKind =
   "order-placed" | "order-accepted" | "order-declined" | "payment-returned" | "order-link";
 
-const months = [
-  "January",
-  "February",
-  "March",
-  "April",
-  "May",
-  "June",
-  "July",
-  "August",
-  "September",
-  "October",
-  "November",
-  "December",
-];
-
-/** "12 May 2027" of an ISO date; a calendar date has no time zone. */
-export function longDate(iso: string): string {
-  const [year = "", month = "", day = ""] = iso.split("-");
-  return `${Number(day)} ${months[Number(month) - 1] ?? month} ${year}`;
-}
-
 /** Each block with its spec code and amount. */
 export function blockRows(data: OrderEmailData): LetterPart {
   return {

@@ -1,4 +1,5 @@
 import { config } from "#server/config.ts";
+import { demoAccounts } from "#server/demo/accounts.ts";
 import type { BrowserSession } from "#server/middleware/browser-session.ts";
 import type { Actor } from "#server/policies/actor.ts";
 import { anyone } from "#server/policies/common.ts";
@@ -15,7 +16,7 @@ export async function presentSession(actor: Actor, session: BrowserSession): Pro
     person: actor.person,
     cartCount: await countCart(holderOf(actor)),
     shop: presentShop(await shopSettings()),
-    demo: config.DEMO,
+    demo: config.DEMO ? demoAccounts : null,
   };
 }
 

@@ -1,5 +1,5 @@
 import { z } from "zod";
-import { personSchema } from "./person.ts";
+import { personSchema, roleSchema } from "./person.ts";
 
 const shopSchema = z.object({
   name: z.string(),
@@ -10,12 +10,20 @@ const shopSchema = z.object({
 });
 export type ShopView = z.infer<typeof shopSchema>;
 
+/** The accounts of a demonstration, one for each role. */
+export const demoSchema = z.object({
+  password: z.string(),
+  accounts: z.array(z.object({ role: roleSchema, email: z.string() })),
+});
+export type DemoView = z.infer<typeof demoSchema>;
+
 /** GET /api/session: who is here, and the token that every changing request carries. */
 export const sessionSchema = z.object({
   csrfToken: z.string(),
   person: personSchema.nullable(),
   cartCount: z.int(),
   shop: shopSchema,
-  demo: z.boolean(),
+  /** Only in a demonstration: accounts to try, with their password. */
+  demo: demoSchema.nullable(),
 });
 export type SessionView = z.infer<typeof sessionSchema>;

@@ -69,7 +69,7 @@ export function sessionView(changes: Partial<SessionView> = {}): SessionView {
       addressLines: ["1 Foundry Row"],
       timeZone: "America/New_York",
     },
-    demo: false,
+    demo: null,
     ...changes,
   };
 }

@@ -29,7 +29,7 @@ export function SiteFooter({ session }: { session: SessionView | undefined }) {
           <Cell label="E-mail">
             {shop !== undefined && <OutsideLink href={`mailto:${shop.email}`}>{shop.email}</OutsideLink>}
           </Cell>
-          {session?.demo === true && (
+          {session?.demo && (
             <Cell label="Demonstration">This shop is invented. Nothing is made and no money moves.</Cell>
           )}
           <div className="grow basis-full space-y-1 border-t border-l border-edge px-3 py-2">

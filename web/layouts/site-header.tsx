@@ -129,7 +129,7 @@ function Navigation({ entries, session, withCart, onFloor }: Omit<SiteHeaderProp
 function CartCell({ count }: { count: number }) {
   return (
     <NavLink to="/cart" className={classNames(cell, current, "gap-2 border-l")}>
-      Cart
+      Cart{" "}
       <span
         className={classNames(
           "min-w-6 border px-1 text-center text-base leading-6 numerals",
@@ -138,7 +138,7 @@ function CartCell({ count }: { count: number }) {
       >
         {count}
       </span>
-      <span className="sr-only">{count === 1 ? "block" : "blocks"}</span>
+      <span className="sr-only">{count === 1 ? " block" : " blocks"}</span>
     </NavLink>
   );
 }

@@ -3,6 +3,7 @@ import { OrderLine } from "#server/models/order-line.ts";
 import { today } from "#server/services/shop/today.ts";
 import { Refusal } from "#server/services/refusal.ts";
 import type { AcceptOrderRequest } from "#shared/contracts/orders.ts";
+import { longDate } from "#shared/units/date-text.ts";
 import { addHistory } from "./add-history.ts";
 import { lockOrder, moveOrder } from "./lock-order.ts";
 import { proposeShipDate } from "./propose-ship-date.ts";
@@ -31,8 +32,9 @@ export async function acceptOrder(
       const answer = request.answers[line.id];
       if (line.specialRequest !== "" && answer) await line.update({ specialRequestAnswer: answer });
     }
-    const reason = request.dateReason === "" ? "" : ` Date set by hand: ${request.dateReason}`;
-    await addHistory(order, `Accepted; ships on ${request.promisedShipOn}.${reason}`, personId);
+    const reason =
+      request.dateReason === "" ? "" : ` The date differs from the estimate: ${request.dateReason}`;
+    await addHistory(order, `Accepted; ships on ${longDate(request.promisedShipOn)}.${reason}`, personId);
     await queueOrderEmail("order-accepted", order, lines, `order-accepted:${order.id}`);
   });
 }

@@ -5,6 +5,7 @@ import { sessionView } from "#tests/support/client-records.ts";
 import { openShop, refuse, renderPage, type Shop } from "#tests/support/client.tsx";
 import { ownPath } from "#web/features/account/own-path.ts";
 import { SignInForm } from "#web/features/account/sign-in-form.tsx";
+import type { DemoView } from "#shared/contracts/session.ts";
 import { Component as Verify } from "#web/routes/account/verify.tsx";
 
 let shop: Shop;
@@ -21,7 +22,7 @@ it("shows the refusal on the form, keeps the e-mail, and signs in at the next tr
   let signedIn = 0;
   renderPage(
     <SignInForm
-      demo={false}
+      demo={null}
       onSignedIn={() => {
         signedIn += 1;
       }}
@@ -45,10 +46,15 @@ it("shows the refusal on the form, keeps the e-mail, and signs in at the next tr
   });
 });
 
+const demo: DemoView = {
+  password: "a demo password",
+  accounts: [{ role: "planner", email: "planner@shop.example" }],
+};
+
 it("names accounts of the demonstration only where it is one", async () => {
-  renderPage(<SignInForm demo={false} onSignedIn={() => undefined} />);
+  renderPage(<SignInForm demo={null} onSignedIn={() => undefined} />);
   expect(screen.queryByText(/demonstration/)).toBeNull();
-  renderPage(<SignInForm demo onSignedIn={() => undefined} />);
+  renderPage(<SignInForm demo={demo} onSignedIn={() => undefined} />);
   expect(await screen.findByRole("heading", { name: "Accounts of the demonstration" })).toBeDefined();
 });
 

@@ -1,19 +1,23 @@
 import { Button } from "#web/components/button.tsx";
 import type { Role } from "#shared/contracts/person.ts";
 import type { SignInRequest } from "#shared/contracts/account.ts";
+import type { DemoView } from "#shared/contracts/session.ts";
 
-const password = "osier-creek-demo";
+const does: Record<Role, string> = {
+  customer: "buys and follows blocks",
+  dealer: "buys for a business",
+  planner: "accepts and declines orders",
+  floor: "reads the orders of the shop",
+  office: "does all of that, and reads the mail",
+};
 
-const accounts: { role: Role; does: string }[] = [
-  { role: "customer", does: "buys and follows blocks" },
-  { role: "dealer", does: "buys for a business" },
-  { role: "planner", does: "accepts and declines orders" },
-  { role: "floor", does: "reads the orders of the shop" },
-  { role: "office", does: "does all of that, and reads the mail" },
-];
+interface DemoAccountsProps {
+  demo: DemoView;
+  onChoose: (account: SignInRequest) => void;
+}
 
 /** The accounts of the demonstration; shown nowhere else. */
-export function DemoAccounts({ onChoose }: { onChoose: (account: SignInRequest) => void }) {
+export function DemoAccounts({ demo: { accounts, password }, onChoose }: DemoAccountsProps) {
   return (
     <section aria-labelledby="demo-accounts" className="max-w-form">
       <h2 id="demo-accounts" className="text-xl">
@@ -23,16 +27,16 @@ export function DemoAccounts({ onChoose }: { onChoose: (account: SignInRequest) 
         The password of each is <span className="font-medium text-ink">{password}</span>
       </p>
       <ul className="mt-3 border-t border-rule">
-        {accounts.map(({ role, does }) => (
+        {accounts.map(({ role, email }) => (
           <li key={role} className="flex items-center justify-between gap-4 border-b border-rule py-1.5">
             <div className="min-w-0">
-              <p className="break-words">{role}@osiercreek.example</p>
-              <p className="text-sm text-iron">{does}</p>
+              <p className="break-words">{email}</p>
+              <p className="text-sm text-iron">{does[role]}</p>
             </div>
             <Button
-              aria-label={`Fill in ${role}@osiercreek.example`}
+              aria-label={`Fill in ${email}`}
               onClick={() => {
-                onChoose({ email: `${role}@osiercreek.example`, password });
+                onChoose({ email, password });
               }}
             >
               Fill in

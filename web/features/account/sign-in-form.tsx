@@ -6,13 +6,14 @@ import { TextField } from "#web/components/text-field.tsx";
 import { TextLink } from "#web/components/text-link.tsx";
 import { formErrors, showRefusal } from "#web/lib/form-errors.ts";
 import { signInRequestSchema, type SignInRequest } from "#shared/contracts/account.ts";
+import type { DemoView } from "#shared/contracts/session.ts";
 import { DemoAccounts } from "./demo-accounts.tsx";
 import { PasswordField } from "./password-field.tsx";
 import { useSignIn } from "./queries.ts";
 
 interface SignInFormProps {
   /** Shows the demo's accounts and fills them in. */
-  demo: boolean;
+  demo: DemoView | null;
   onSignedIn: () => void;
 }
 
@@ -67,6 +68,7 @@ export function SignInForm({ demo, onSignedIn }: SignInFormProps) {
       </form>
       {demo && (
         <DemoAccounts
+          demo={demo}
           onChoose={({ email, password }) => {
             setValue("email", email);
             setValue("password", password);
