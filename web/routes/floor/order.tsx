@@ -1,4 +1,5 @@
 import { useQuery } from "@tanstack/react-query";
+import { useState } from "react";
 import { useParams, type LoaderFunctionArgs } from "react-router-dom";
 import { ButtonLink } from "#web/components/button.tsx";
 import { Notice } from "#web/components/notice.tsx";
@@ -22,19 +23,18 @@ export function Component() {
   const { number = "" } = useParams();
   const review = useQuery(orderReviewQuery(number));
   const session = useSession();
-  const role = session?.person?.role;
+  const present = session?.person?.role;
+  const [role, setRole] = useState(present);
+  // Whoever is signed out while they write keeps the form, with what they wrote.
+  if (present !== undefined && present !== role) setRole(present);
   const mayDecide = role === "planner" || role === "office";
-  useHoldOpen(number, mayDecide && review.data?.state === "placed");
+  useHoldOpen(number, present !== undefined && mayDecide && review.data?.state === "placed");
   return (
     <div className="space-y-6">
       <PageHeading over={<TextLink to="/floor">Orders</TextLink>} title={`Order ${number}`} />
       {review.data !== undefined && session !== undefined ? (
         <>
-          {review.isError && (
-            <Notice kind="caution" title="What stands here may be out of date">
-              The shop's server could not be reached just now. What you typed is kept.
-            </Notice>
-          )}
+          {review.isError && <OutOfDate error={review.error} number={number} />}
           <ReviewView
             // Another order, another form.
             key={number}
@@ -54,5 +54,26 @@ export function Component() {
         <Skeleton lines={10} label="Reading the order" />
       )}
     </div>
+  );
+}
+
+/** The order was read before, and cannot be read again. */
+function OutOfDate({ error, number }: { error: Error; number: string }) {
+  if (error instanceof ApiProblem && error.status === 401) {
+    const next = encodeURIComponent(`/floor/orders/${number}`);
+    return (
+      <Notice
+        kind="caution"
+        title="You are signed out"
+        action={<ButtonLink to={`/account/sign-in?next=${next}`}>Sign in</ButtonLink>}
+      >
+        Nothing was sent. What you typed is kept, and stands here again after you signed in.
+      </Notice>
+    );
+  }
+  return (
+    <Notice kind="caution" title="What stands here may be out of date">
+      The shop's server could not be reached just now. What you typed is kept.
+    </Notice>
   );
 }
