@@ -86,8 +86,13 @@ export async function payWith(page: Page, card: string): Promise<void> {
 /** Signs in with a demo account. */
 export async function signIn(page: Page, origin: string, role: string): Promise<void> {
   await page.goto(`${origin}/account/sign-in`);
-  await page.getByLabel("E-mail").fill(`${role}@osiercreek.example`);
-  await page.getByLabel("Password").fill("osier-creek-demo");
-  await page.getByRole("button", { name: "Sign in" }).click();
+  await fillSignIn(page, `${role}@osiercreek.example`, "osier-creek-demo");
   await page.waitForURL((url) => url.pathname !== "/account/sign-in");
+}
+
+/** On the sign-in page. */
+export async function fillSignIn(page: Page, email: string, password: string): Promise<void> {
+  await page.getByLabel("E-mail").fill(email);
+  await page.getByLabel("Password").fill(password);
+  await page.getByRole("button", { name: "Sign in" }).click();
 }

@@ -23,6 +23,11 @@ export class Visitor {
     this.#origin = origin;
   }
 
+  /** What a browser must hold to be this visitor. */
+  cookies(): { name: string; value: string; url: string }[] {
+    return [...this.#cookies].map(([name, value]) => ({ name, value, url: this.#origin }));
+  }
+
   async get(path: string): Promise<Reply> {
     return this.#send("GET", path);
   }
