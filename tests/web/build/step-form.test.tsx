@@ -1,4 +1,4 @@
-import { screen, waitFor, within } from "@testing-library/react";
+import { cleanup, screen, waitFor, within } from "@testing-library/react";
 import { afterEach, beforeEach, expect, it, vi } from "vitest";
 import { demoCatalogue } from "#server/demo/catalogue/catalogue.ts";
 import { searchToBuild } from "#shared/catalogue/build-address.ts";
@@ -42,6 +42,21 @@ it("starts at the first step, takes choices into the address and goes on by Ente
     expect(answersIn(router)).toMatchObject({ duty: "drag", family: "marl", deckHeight: "d9025" });
   });
   expect(screen.getByText(/^Price \$2,940\.00; ships/)).toBeDefined();
+});
+
+it("leads back from a fresh sheet to the build in progress", async () => {
+  const { router, user } = openBuild("/build/duty");
+  await user.click(await radio(/^Marine/));
+  await waitFor(() => {
+    expect(window.sessionStorage.getItem("build-in-progress")).toMatch(/^\/build\/duty\?spec=/);
+  });
+  cleanup();
+  const fresh = openBuild("/build");
+  await fresh.user.click(await screen.findByText("Go on with it"));
+  await waitFor(() => {
+    expect(answersIn(fresh.router)).toEqual(answersIn(router));
+  });
+  expect((await radio(/^Marine/)).checked).toBe(true);
 });
 
 it("changes the family freely while nothing was chosen that the other lacks", async () => {

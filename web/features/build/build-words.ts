@@ -3,7 +3,7 @@ import type { Evaluation, Mend, OptionEffect } from "#shared/rules/evaluation.ts
 import { date, daysChange, money, moneyChange, poundsChange } from "#web/lib/format.ts";
 
 /** Amounts in whole dollars without their cents: "+$310", "−$45.50". */
-export function shortMoneyChange(cents: number): string {
+function shortMoneyChange(cents: number): string {
   return moneyChange(cents).replace(/\.00$/, "");
 }
 

@@ -2,6 +2,7 @@ import type { Choice } from "#shared/catalogue/catalogue.ts";
 import type { ChoiceState } from "#shared/rules/evaluation.ts";
 import { OptionList, type OptionRow } from "#web/components/option-list.tsx";
 import { useBuildDesk } from "./build-desk.tsx";
+import { ChoiceHelp } from "./choice-help.tsx";
 import { ClosedReason, MendButton } from "./closed-option.tsx";
 import { optionEffects } from "./option-effects.ts";
 import { SizeChart } from "./size-chart.tsx";
@@ -55,27 +56,4 @@ function EffectParts({ parts }: { parts: string[] }) {
       {part}
     </span>
   ));
-}
-
-interface ChoiceHelpProps {
-  choice: Choice;
-  /** The choice has one option in the family. */
-  single: boolean;
-}
-
-/** What it is in one line; when one wants it and what it costs, on demand. */
-export function ChoiceHelp({ choice, single }: ChoiceHelpProps) {
-  const { what, when, cost } = choice.help;
-  return (
-    <>
-      <p>{single ? `One option in this family. ${what}` : what}</p>
-      <details className="text-sm">
-        <summary className="inline-flex min-h-6 cursor-pointer items-center text-dye underline underline-offset-4">
-          When you want it, what it costs you
-        </summary>
-        <p className="mt-1">{when}</p>
-        <p className="mt-1">{cost}</p>
-      </details>
-    </>
-  );
 }

@@ -8,7 +8,7 @@ import { classNames } from "#web/components/class-names.ts";
 import { StateMark } from "#web/components/state-mark.tsx";
 import { useBuildDesk, type BuildDesk } from "./build-desk.tsx";
 import { effectParts, inSentence } from "./build-words.ts";
-import { ChoiceHelp } from "./choice-question.tsx";
+import { ChoiceHelp } from "./choice-help.tsx";
 import { ClosedReason, MendButton } from "./closed-option.tsx";
 import { optionEffects } from "./option-effects.ts";
 import { SizeEntry } from "./size-entry.tsx";

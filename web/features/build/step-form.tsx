@@ -10,6 +10,7 @@ import { useBuildDesk } from "./build-desk.tsx";
 import { BrokenBuild } from "./broken-build.tsx";
 import { BuildSheet } from "./build-sheet.tsx";
 import { ChoiceQuestion } from "./choice-question.tsx";
+import { EarlierBuild } from "./earlier-build.tsx";
 import { NumberQuestion } from "./number-question.tsx";
 import { StepHeading } from "./step-heading.tsx";
 import { reviewStep } from "./step-list.tsx";
@@ -50,6 +51,7 @@ export function StepForm({ step }: { step: Step }) {
                 {problems.join(" ")}
               </Notice>
             )}
+            <EarlierBuild />
             <BrokenBuild />
             {step.caution !== undefined && <CautionLine>{step.caution}</CautionLine>}
             {build.answers["family"] === undefined && !step.choices.includes("family") && (
