@@ -15,20 +15,18 @@ export const problemSchema = z.looseObject({
 export type Problem = z.infer<typeof problemSchema>;
 
 /** The last word of a problem's `type`, by which the client tells problems apart. */
-const problemKinds = [
-  "validation",
-  "not-signed-in",
-  "not-allowed",
-  "not-found",
-  "csrf",
-  "too-many-requests",
-  "conflict",
-  "price-changed",
-  "build-refused",
-  "payment-closed",
-  "bad-signature",
-  "gateway-unavailable",
-  "too-large",
-  "internal",
-] as const;
-export type ProblemKind = (typeof problemKinds)[number];
+export type ProblemKind =
+  | "validation"
+  | "not-signed-in"
+  | "not-allowed"
+  | "not-found"
+  | "csrf"
+  | "too-many-requests"
+  | "conflict"
+  | "price-changed"
+  | "build-refused"
+  | "payment-closed"
+  | "bad-signature"
+  | "gateway-unavailable"
+  | "too-large"
+  | "internal";
