@@ -19,23 +19,27 @@ const ground = { stop: "bg-stop-wash", caution: "bg-caution-wash", note: "" } as
 /** One finding of the rules: word, shape and colour together. Put several in a `<ul>`. */
 export function Finding({ severity, children, why, action, undecided = false }: FindingProps) {
   return (
-    <li className={`flex flex-wrap items-start gap-x-3 border-b border-rule px-3 py-2.5 ${ground[severity]}`}>
+    <li className={`flex items-start gap-x-3 border-b border-rule px-3 py-2.5 ${ground[severity]}`}>
       <StateMark kind={severity} className="mt-1 size-4 shrink-0" />
-      <div className="min-w-0 grow basis-60">
+      <div className="min-w-0 grow">
         <p>
           <span className={`font-semibold ${ink[severity]}`}>{words[severity]}.</span> {children}
           {undecided && <span className="text-iron"> To be confirmed.</span>}
         </p>
-        {why !== undefined && (
-          <details className="text-sm text-iron">
-            <summary className="inline-flex min-h-6 cursor-pointer items-center underline underline-offset-4">
-              Why
-            </summary>
-            <p className="max-w-text">{why}</p>
-          </details>
+        {(action !== undefined || why !== undefined) && (
+          <div className="flex flex-wrap items-start gap-x-4 text-sm">
+            {action}
+            {why !== undefined && (
+              <details className="text-iron open:basis-full">
+                <summary className="inline-flex min-h-6 cursor-pointer items-center underline underline-offset-4">
+                  Why
+                </summary>
+                <p className="max-w-text">{why}</p>
+              </details>
+            )}
+          </div>
         )}
       </div>
-      {action}
     </li>
   );
 }

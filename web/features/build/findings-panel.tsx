@@ -12,9 +12,9 @@ export function FindingsPanel({ here }: { here: string }) {
   const stepName = (id: string) => current.catalogue.steps.find((step) => step.id === id)?.name ?? "its step";
   const action = ({ step }: RuleFinding) =>
     step === here ? (
-      <span className="shrink-0 text-sm text-iron">this step</span>
+      <span className="inline-flex min-h-6 items-center text-iron">this step</span>
     ) : (
-      <TextLink to={{ pathname: stepPath(step), search }} className="inline-flex min-h-6 shrink-0 text-sm">
+      <TextLink to={{ pathname: stepPath(step), search }} className="inline-flex min-h-6 items-center">
         {stepName(step)}
       </TextLink>
     );
