@@ -46,6 +46,24 @@ describe("a session", () => {
     expect(cookie).toMatch(/Path=\//);
   });
 
+  test("is each person's own when many sign in at the same moment", async () => {
+    const people = await Promise.all(Array.from({ length: 8 }, () => makePerson()));
+    const answers = await Promise.all(
+      people.map(async (person, index) => {
+        const password = index % 2 === 0 ? factoryPassword : "not-their-password";
+        const browser = new Browser(app);
+        const answer = await browser.signIn(person.email, password);
+        const { person: seen } = sessionSchema.parse((await browser.get("/api/session")).body);
+        return { status: answer.status, seen: seen?.email ?? null };
+      }),
+    );
+    expect(answers).toEqual(
+      people.map(({ email }, index) =>
+        index % 2 === 0 ? { status: 200, seen: email } : { status: 422, seen: null },
+      ),
+    );
+  });
+
   test("gets a new id at sign-in, and the old one is worth nothing", async () => {
     const first = await makePerson();
     const second = await makePerson();
