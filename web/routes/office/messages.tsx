@@ -3,12 +3,9 @@ import { useSearchParams, type LoaderFunctionArgs } from "react-router-dom";
 import { ButtonLink } from "#web/components/button.tsx";
 import { Empty } from "#web/components/empty.tsx";
 import { FilterLinks } from "#web/components/filter-links.tsx";
-import { Notice } from "#web/components/notice.tsx";
+import { ListResult } from "#web/components/list-result.tsx";
 import { PageHeading } from "#web/components/page-heading.tsx";
-import { Pager } from "#web/components/pager.tsx";
-import { RequestFault } from "#web/components/request-fault.tsx";
 import { SearchBox } from "#web/components/search-box.tsx";
-import { Skeleton } from "#web/components/skeleton.tsx";
 import { MessageTable } from "#web/features/messages/message-table.tsx";
 import { messageListQuery, readMessagesAddress } from "#web/features/messages/queries.ts";
 import { queryClient } from "#web/lib/query-client.ts";
@@ -39,27 +36,13 @@ export function Component() {
         <FilterLinks label="State" parameter="state" current={query.state ?? "all"} options={states} />
         <SearchBox label="Find a message by receiver, subject or order" />
       </div>
-      {list.data !== undefined && timeZone !== undefined ? (
-        <>
-          {list.isError && (
-            <Notice kind="caution" title="This list may be out of date">
-              The shop's server could not be reached just now. The list is asked for again by itself.
-            </Notice>
-          )}
-          <div className={list.isPlaceholderData ? "opacity-60" : undefined}>
-            <MessageTable
-              messages={list.data.messages}
-              timeZone={timeZone}
-              empty={<NothingHere query={query} />}
-            />
-          </div>
-          <Pager page={list.data.page} pages={list.data.pages} label="Pages of messages" />
-        </>
-      ) : list.isError ? (
-        <RequestFault error={list.error} onRetry={() => void list.refetch()} retrying={list.isFetching} />
-      ) : (
-        <Skeleton lines={8} label="Reading the messages" />
-      )}
+      <ListResult list={list} things="messages">
+        {({ messages }) =>
+          timeZone !== undefined && (
+            <MessageTable messages={messages} timeZone={timeZone} empty={<NothingHere query={query} />} />
+          )
+        }
+      </ListResult>
     </div>
   );
 }
