@@ -16,6 +16,8 @@ stripeWebhookRouter.post(
       Buffer.isBuffer(body) ? body : Buffer.alloc(0),
       request.get("stripe-signature") ?? "",
     );
+    if (outcome === "does not match")
+      request.log.error({ outcome }, "an event of Stripe fits no payment of ours");
     response.json({ received: true, outcome });
   },
 );

@@ -21,7 +21,10 @@ export async function checkPayment(paymentId: string): Promise<void> {
   }
   const session = await paymentGateway.readCheckoutSession(sessionId);
   if (session.status === "complete") {
-    await transaction(() => recordPayment(session));
+    const { outcome } = await transaction(() => recordPayment(session));
+    // Money that fits no payment of ours is for a person to look at: the job fails and stays in sight.
+    if (outcome === "does not match")
+      throw new Error(`checkout session ${sessionId} does not match payment ${paymentId}`);
     return;
   }
   if (session.status === "expired") {
