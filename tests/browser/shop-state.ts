@@ -1,5 +1,5 @@
 import type { BrowserContext } from "playwright-core";
-import { expect } from "vitest";
+import { expect, vi } from "vitest";
 import { orderSchema } from "#shared/contracts/orders.ts";
 import type { TestShop } from "../support/test-server.ts";
 import { fillCart, freightToTennessee, placeOrder, Visitor } from "../support/visitor.ts";
@@ -18,21 +18,23 @@ async function onPayments(shop: TestShop, path: string, body: unknown): Promise<
   expect(response.status).toBe(200);
 }
 
-/** An order of a guest, paid and in the shop's queue. */
+/** An order, paid and in the shop's queue; of a guest unless somebody else is named. */
 export async function paidOrder(
   shop: TestShop,
-  cart: { specialRequest?: string } = {},
-): Promise<{ guest: Visitor; number: string; session: string }> {
-  const guest = new Visitor(shop.origin);
-  await fillCart(guest, cart);
-  const { orderNumber, session } = await placeOrder(guest, freightToTennessee);
+  options: { buyer?: Visitor; specialRequest?: string } = {},
+): Promise<{ buyer: Visitor; number: string; session: string }> {
+  const { buyer = new Visitor(shop.origin), ...cart } = options;
+  await fillCart(buyer, cart);
+  const { orderNumber, session } = await placeOrder(buyer, freightToTennessee);
   await onPayments(shop, `/checkout/${session}/pay`, { card: succeeds });
-  await expect
-    .poll(async () => orderSchema.parse((await guest.get(`/api/orders/${orderNumber}`)).body).state, {
-      timeout: 20_000,
-    })
-    .toBe("placed");
-  return { guest, number: orderNumber, session };
+  await vi.waitFor(
+    async () => {
+      const order = orderSchema.parse((await buyer.get(`/api/orders/${orderNumber}`)).body);
+      expect(order.state).toBe("placed");
+    },
+    { timeout: 20_000, interval: 100 },
+  );
+  return { buyer, number: orderNumber, session };
 }
 
 /** A cart whose payment page was opened and ran out. */

@@ -1,6 +1,6 @@
 import { readFileSync } from "node:fs";
 import { createRequire } from "node:module";
-import type { AxeResults } from "axe-core";
+import type { AxeResults, RunOptions } from "axe-core";
 import { type Browser, type BrowserContext, chromium, type Page } from "playwright-core";
 import { atEndOfFile } from "./end-of-file.ts";
 
@@ -46,13 +46,15 @@ export async function newVisitor(
 
 const axeSource = readFileSync(createRequire(import.meta.url).resolve("axe-core/axe.min.js"), "utf8");
 
-/** What axe-core finds wrong on the page as it stands: one line for each rule and element. */
-export async function axeViolations(page: Page): Promise<string[]> {
-  await page.evaluate(axeSource);
-  const results = await page.evaluate(async () => {
-    const { axe } = globalThis as typeof globalThis & { axe: { run: () => Promise<AxeResults> } };
-    return axe.run();
-  });
+/** What axe-core finds wrong on the page as it stands, by all its rules or those named: one line for each rule and element. */
+export async function axeViolations(page: Page, rules?: string[]): Promise<string[]> {
+  if (!(await page.evaluate(() => "axe" in globalThis))) await page.evaluate(axeSource);
+  const results = await page.evaluate(async (only) => {
+    const { axe } = globalThis as typeof globalThis & {
+      axe: { run: (options: RunOptions) => Promise<AxeResults> };
+    };
+    return axe.run({ resultTypes: ["violations"], ...(only === undefined ? {} : { runOnly: only }) });
+  }, rules);
   return results.violations.flatMap((violation) =>
     violation.nodes.map(
       (node) =>
