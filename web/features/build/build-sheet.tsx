@@ -1,4 +1,5 @@
 import type { ReactNode } from "react";
+import { classNames } from "#web/components/class-names.ts";
 import { date, money } from "#web/lib/format.ts";
 import { useBuildDesk } from "./build-desk.tsx";
 import { BuildTitleBlock } from "./build-title-block.tsx";
@@ -20,7 +21,7 @@ interface BuildSheetProps {
 
 /** The sheet of a build: its steps, what is asked, what comes of it, and the title block that stays in sight at its foot. */
 export function BuildSheet({ here, action, children }: BuildSheetProps) {
-  const { undo, redo } = useBuildDesk();
+  const { undo, redo, changed } = useBuildDesk();
   useUndoKeys(undo, redo);
   return (
     <>
@@ -29,7 +30,13 @@ export function BuildSheet({ here, action, children }: BuildSheetProps) {
           <StepList here={here} />
         </div>
         <div className="min-w-0">{children}</div>
-        <div className="space-y-6 lg:col-start-2 xl:sticky xl:top-4 xl:col-start-3 xl:max-h-[calc(100dvh-8rem)] xl:self-start xl:overflow-y-auto xl:pr-1 xl:pb-2">
+        <div
+          className={classNames(
+            "space-y-6 lg:col-start-2 xl:sticky xl:top-4 xl:col-start-3 xl:self-start xl:overflow-y-auto xl:pr-1 xl:pb-2",
+            // Ends above what stays in sight at the foot, so that nothing in it takes focus behind that.
+            changed === null ? "xl:max-h-[calc(100dvh-8rem)]" : "xl:max-h-[calc(100dvh-12rem)]",
+          )}
+        >
           <div className="xl:hidden">
             <BuildTitleBlock />
           </div>

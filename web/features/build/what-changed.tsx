@@ -2,8 +2,11 @@ import { useEffect, useRef } from "react";
 import { Button } from "#web/components/button.tsx";
 import { TextLink } from "#web/components/text-link.tsx";
 import { stepPath } from "./build-address.ts";
-import { useBuildDesk } from "./build-desk.tsx";
+import { useBuildDesk, type Changed } from "./build-desk.tsx";
 import { choiceName, optionName } from "./build-words.ts";
+
+/** Mends that focus has followed: another step, or a redo, shows the same strip again and leaves the focus alone. */
+const focusMoved = new WeakSet<Changed>();
 
 /** After a mend: what it changed besides the wanted option, each with the way to it. Focus goes to what changed. */
 export function WhatChanged() {
@@ -11,7 +14,8 @@ export function WhatChanged() {
   const { catalogue } = current;
   const strip = useRef<HTMLDivElement>(null);
   useEffect(() => {
-    if (changed === null) return;
+    if (changed === null || focusMoved.has(changed)) return;
+    focusMoved.add(changed);
     const onThisStep = changed.changes
       .map(({ choice, to }) => (to === null ? null : document.getElementById(`${choice}-${to}`)))
       .find((control) => control !== null);
