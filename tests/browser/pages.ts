@@ -9,7 +9,7 @@ import { fillCart, signedIn, Visitor } from "../support/visitor.ts";
 import { expiredPayment, paidOrder } from "./shop-state.ts";
 
 /** Who looks at a page. */
-export type Reader =
+type Reader =
   "visitor" | "cart" | "buyer" | "late" | "customer" | "dealer" | "planner" | "floor" | "office";
 
 /** What is known once the shop has been prepared. */

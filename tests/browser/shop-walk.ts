@@ -6,7 +6,7 @@ import { expect } from "vitest";
 export const buyer = { name: "Ada Farrow", email: "ada@example.com", phone: "(615) 555-0134" };
 
 /** Goes on to the next step of the build. */
-export async function goOn(page: Page): Promise<void> {
+async function goOn(page: Page): Promise<void> {
   const heading = await page.getByRole("heading", { level: 1 }).innerText();
   await page.getByRole("button", { name: /^Next/ }).first().click();
   await expect.poll(() => page.getByRole("heading", { level: 1 }).innerText()).not.toBe(heading);
@@ -18,7 +18,7 @@ export async function choose(page: Page, question: RegExp, option: RegExp): Prom
 }
 
 /** Answers every question of this step that has no answer yet with its first open option. */
-export async function answerTheRest(page: Page): Promise<void> {
+async function answerTheRest(page: Page): Promise<void> {
   const questions = page.getByRole("group").filter({ has: page.getByRole("radio") });
   for (let index = 0; index < (await questions.count()); index += 1) {
     const question = questions.nth(index);
