@@ -1,6 +1,7 @@
 import type { Build } from "../catalogue/build.ts";
 import { priceBuild } from "../pricing/price-build.ts";
-import { compileCatalogue, type Assignment, type CompiledCatalogue } from "./compile.ts";
+import { compileCatalogue, type CompiledCatalogue } from "./compile.ts";
+import type { Assignment } from "./problem.ts";
 import type { ChoiceState, Evaluation, EvaluationContext, OptionEffect } from "./evaluation.ts";
 import { figuresOf, findingsOf } from "./findings.ts";
 import { openOptions } from "./open-options.ts";

@@ -1,8 +1,10 @@
-import type { Condition, Rule, Severity, Step } from "../catalogue/catalogue.ts";
-import type { Assignment, CompiledCatalogue, CompiledRule } from "./compile.ts";
+import type { Condition, Severity, Step } from "../catalogue/catalogue.ts";
+import type { CompiledCatalogue } from "./compile.ts";
+import type { CompiledRule } from "./compile-rule.ts";
+import type { Assignment } from "./problem.ts";
 import type { Figure, Finding } from "./evaluation.ts";
 import { holds, quantityOf, type Reading } from "./reading.ts";
-import { judge } from "./verdict.ts";
+import { isIdle, judge } from "./verdict.ts";
 
 const rank: Record<Severity, number> = { stop: 0, caution: 1, note: 2 };
 
@@ -35,11 +37,6 @@ export function findingsOf(compiled: CompiledCatalogue, assignment: Assignment, 
   );
 }
 
-/** Whether the rule's own condition is not known to apply, so that nothing is there to be confirmed. */
-function isIdle(rule: Rule, reading: Reading): boolean {
-  return rule.kind === "expression" && rule.when !== undefined && holds(rule.when, reading) !== true;
-}
-
 /** The last step, in the order of the form, in which something that the rule reads can be changed. */
 function stepOf(compiled: CompiledCatalogue, entry: CompiledRule): string {
   const choices = new Set(entry.scope.map((index) => compiled.choices[index]?.id ?? ""));
@@ -54,6 +51,7 @@ function stepOf(compiled: CompiledCatalogue, entry: CompiledRule): string {
 /** All figures with their values and the limit that a rule holds them to now. */
 export function figuresOf(compiled: CompiledCatalogue, reading: Reading, weight: number | null): Figure[] {
   const figures = compiled.figures.map((figure): Figure => {
+    const at = figure.at?.(reading, compiled.catalogue) ?? null;
     return {
       id: figure.id,
       name: figure.name,
@@ -62,6 +60,7 @@ export function figuresOf(compiled: CompiledCatalogue, reading: Reading, weight:
       places: figure.places,
       formula: figure.formula,
       limit: limitOf(compiled, figure.id, reading),
+      ...(at === null ? {} : { at }),
     };
   });
   figures.push({

@@ -1,10 +1,11 @@
 import type { Build } from "../catalogue/build.ts";
-import { compileCatalogue, type Assignment, type CompiledCatalogue } from "./compile.ts";
+import { compileCatalogue, type CompiledCatalogue } from "./compile.ts";
+import type { Assignment } from "./problem.ts";
 import { minimalConflict } from "./conflict.ts";
 import type { EvaluationContext, Mend } from "./evaluation.ts";
 import { existingOnly } from "./evaluate.ts";
 import { withWanted, type Wanted } from "./explain.ts";
-import { findInAnyFamily } from "./open-options.ts";
+import { isPossible } from "./open-options.ts";
 import { createTotals, daysBetween, type Totals } from "./totals.ts";
 
 /**
@@ -40,7 +41,7 @@ export function cheapestMend(
   question: MendQuestion,
 ): Mend | null {
   const { target, numbers, build } = question;
-  if (findInAnyFamily(compiled, target, numbers) !== null) return null;
+  if (isPossible(compiled, target, numbers)) return null;
   const mine = new Set(build.mine.flatMap((id) => compiled.choiceIndex.get(id) ?? []));
   if (question.held !== null) mine.add(question.held);
   const totalsOf = createTotals(context, compiled, numbers);
@@ -146,14 +147,14 @@ function cheapestFilling(filling: Filling, known: Candidate | null): Candidate |
         totals: totalsOf(given),
       };
       if (best !== null && compareCandidates(candidate, best) >= 0) return;
-      if (findInAnyFamily(compiled, given, numbers) !== null) best = candidate;
+      if (isPossible(compiled, given, numbers)) best = candidate;
       return;
     }
     const options = compiled.choices[choice]?.options ?? [];
     for (const option of options.keys()) {
       if (option === target[choice]) continue;
       given[choice] = option;
-      if (at + 1 === freed.length || findInAnyFamily(compiled, given, numbers) !== null) fill(at + 1);
+      if (at + 1 === freed.length || isPossible(compiled, given, numbers)) fill(at + 1);
     }
     given[choice] = -1;
   };

@@ -3,7 +3,8 @@ import { blockWeight } from "../geometry/weight.ts";
 import { baseAmount, optionAmount } from "../pricing/price-build.ts";
 import { parseDay } from "../scheduling/calendar.ts";
 import { estimateShipDate } from "../scheduling/estimate.ts";
-import type { Assignment, CompiledCatalogue } from "./compile.ts";
+import type { CompiledCatalogue } from "./compile.ts";
+import type { Assignment } from "./problem.ts";
 import type { EvaluationContext } from "./evaluation.ts";
 import type { Reading } from "./reading.ts";
 
