@@ -10,7 +10,7 @@ import { useBuildDesk } from "./build-desk.tsx";
 import { BrokenBuild } from "./broken-build.tsx";
 import { BuildSheet } from "./build-sheet.tsx";
 import { ChoiceQuestion } from "./choice-question.tsx";
-import { NumberQuestion } from "./number-question.tsx";
+import { NumberGroups } from "./number-groups.tsx";
 import { StepHeading } from "./step-heading.tsx";
 import { reviewStep } from "./step-list.tsx";
 import { stepOf } from "./what-is-missing.tsx";
@@ -26,11 +26,6 @@ export function StepForm({ step }: { step: Step }) {
     event.preventDefault();
     void navigate({ pathname: stepPath(next?.id ?? reviewStep), search });
   };
-  const numbers = catalogue.numbers.filter(
-    ({ id, onlyWith }) =>
-      step.numbers.includes(id) &&
-      (onlyWith === undefined || build.answers[onlyWith.choice] === onlyWith.option),
-  );
   return (
     <form onSubmit={goOn} noValidate className="[&_input]:scroll-my-28">
       <StepHeading title={step.name} position={position} intro={step.intro} />
@@ -69,12 +64,11 @@ export function StepForm({ step }: { step: Step }) {
             return (
               <div key={id} id={id} className="scroll-mt-4">
                 <ChoiceQuestion choice={choice} state={state} />
+                <NumberGroups step={step} choice={id} />
               </div>
             );
           })}
-          {numbers.map((field) => (
-            <NumberQuestion key={field.id} field={field} />
-          ))}
+          <NumberGroups step={step} choice={null} />
         </div>
       </BuildSheet>
     </form>
