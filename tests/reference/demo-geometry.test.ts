@@ -2,7 +2,7 @@ import { describe, expect, test } from "vitest";
 import { demoCatalogue } from "#server/demo/catalogue/catalogue.ts";
 import * as dimensions from "#shared/geometry/dimensions.ts";
 import { displacement } from "#shared/geometry/displacement.ts";
-import { outlineReach, rodToCase } from "#shared/geometry/rod-outline.ts";
+import { measureOutline, rodToCase } from "#shared/geometry/rod-outline.ts";
 import { blockWeight } from "#shared/geometry/weight.ts";
 
 /**
@@ -211,7 +211,7 @@ describe("stack-up, bore and small dimensions", () => {
     expect(() => dimensions.deliveredBore({ finishBore: 4, stock: 4 })).toThrow("greater than the bore");
     expect(() => dimensions.lobeToJournal({ journalDiameter: 1.86801, lobeRadius: 0.9 })).toThrow("grid");
     expect(() =>
-      outlineReach([
+      measureOutline([
         [0, 0],
         [1, 1],
       ]),
