@@ -1,6 +1,6 @@
 import type { Catalogue, Choice, NumberField, Option, Rule } from "../catalogue/catalogue.ts";
 import { figureDefinitions } from "./figures.ts";
-import { readsOf } from "./verdict.ts";
+import { readsOf, type RuleReads } from "./verdict.ts";
 
 /** A rule with what it depends on. */
 export interface CompiledRule {
@@ -69,28 +69,12 @@ export interface RuleParts {
 
 /** Throws RangeError where the rule reads a figure or a choice that there is not. */
 export function compileRule(rule: Rule, parts: RuleParts): CompiledRule {
-  const direct = readsOf(rule);
-  const figures = [...direct.figures];
-  const choices = new Set(direct.choices);
-  const values = new Set(direct.values);
-  const words = new Set(direct.words);
-  const numbers = new Set(direct.numbers);
-  for (const id of figures) {
-    const figure = figureDefinitions.find((candidate) => candidate.id === id);
-    if (figure === undefined)
-      throw new RangeError(`rule ${rule.id} reads the figure ${id}, which there is not`);
-    figure.values.forEach((name) => values.add(name));
-    figure.words?.forEach((name) => words.add(name));
-    figure.numbers?.forEach((id) => numbers.add(id));
-    figure.choices?.forEach((name) => choices.add(name));
-  }
-  for (const name of values) {
-    parts.suppliers.value.get(name)?.forEach((choice) => choices.add(choice));
-    if (parts.numberFields.has(name)) numbers.add(name);
-  }
-  for (const name of words) parts.suppliers.word.get(name)?.forEach((choice) => choices.add(choice));
-  for (const id of numbers) parts.gates.get(id)?.forEach(([choice]) => choices.add(choice));
-  const scope = [...choices].map((id) => {
+  const reads = readsOf(rule);
+  const missing = [...reads.figures].find((id) => !figureDefinitions.some((figure) => figure.id === id));
+  if (missing !== undefined)
+    throw new RangeError(`rule ${rule.id} reads the figure ${missing}, which there is not`);
+  const { choices, numbers } = dependenciesOf(reads, parts);
+  const scope = choices.map((id) => {
     const index = parts.choiceIndex.get(id);
     if (index === undefined)
       throw new RangeError(`rule ${rule.id} reads the choice ${id}, which there is not`);
@@ -99,7 +83,32 @@ export function compileRule(rule: Rule, parts: RuleParts): CompiledRule {
   return {
     rule,
     scope: scope.filter((index) => index !== parts.familyChoice).sort((a, b) => a - b),
-    numbers: [...numbers],
-    figures,
+    numbers,
+    figures: [...reads.figures],
   };
+}
+
+/** The choices and typed numbers on which it depends what is read: those that supply it, or say whether a number is read. */
+export function dependenciesOf(
+  reads: RuleReads,
+  { suppliers, gates, numberFields }: Pick<RuleParts, "suppliers" | "gates" | "numberFields">,
+): { choices: string[]; numbers: string[] } {
+  const choices = new Set(reads.choices);
+  const values = new Set(reads.values);
+  const words = new Set(reads.words);
+  const numbers = new Set(reads.numbers);
+  for (const figure of figureDefinitions) {
+    if (!reads.figures.has(figure.id)) continue;
+    figure.values.forEach((name) => values.add(name));
+    figure.words?.forEach((name) => words.add(name));
+    figure.numbers?.forEach((id) => numbers.add(id));
+    figure.choices?.forEach((name) => choices.add(name));
+  }
+  for (const name of values) {
+    suppliers.value.get(name)?.forEach((choice) => choices.add(choice));
+    if (numberFields.has(name)) numbers.add(name);
+  }
+  for (const name of words) suppliers.word.get(name)?.forEach((choice) => choices.add(choice));
+  for (const id of numbers) gates.get(id)?.forEach(([choice]) => choices.add(choice));
+  return { choices: [...choices], numbers: [...numbers] };
 }

@@ -1,5 +1,5 @@
 import type { Catalogue, Choice, Family, NumberField } from "../catalogue/catalogue.ts";
-import { compileRule, gatesOf, suppliersOf, type CompiledRule } from "./compile-rule.ts";
+import { compileRule, dependenciesOf, gatesOf, suppliersOf, type CompiledRule } from "./compile-rule.ts";
 import { figureDefinitions, type FigureDefinition } from "./figures.ts";
 import { createProblem, type Assignment, type Problem } from "./problem.ts";
 import { createReading, type Reading } from "./reading.ts";
@@ -17,6 +17,8 @@ export interface CompiledCatalogue {
   stops: readonly CompiledRule[];
   figures: readonly FigureDefinition[];
   numberFields: ReadonlyMap<string, NumberField>;
+  /** By choice: 1 where the iron that is bored out depends on it. */
+  borings: Uint8Array;
   /** Families by option index of the family choice. */
   families: readonly Family[];
   reading(family: number, optionIndexOf: (choice: number) => number, numbers: Numbers): Reading;
@@ -24,6 +26,8 @@ export interface CompiledCatalogue {
   tables(family: number, numbers: Numbers): readonly RuleTable[];
   /** The stop rules of a family at the typed numbers; the same object for the same numbers that stop rules read. */
   problem(family: number, numbers: Numbers): Problem;
+  /** Whether a choice's option exists in the family (any without one); all families exist. */
+  exists(family: number, choice: number, option: number): boolean;
   /** Known answers of a build: option indices, unknown or nonexistent ones left out. */
   assignment(answers: Readonly<Record<string, string>>): Assignment;
 }
@@ -109,12 +113,28 @@ function compile(catalogue: Catalogue): CompiledCatalogue {
     stops,
     figures: figureDefinitions,
     numberFields,
+    borings: boringsOf(choices, dependenciesOf(boringReads, { suppliers, gates, numberFields }).choices),
     families,
     reading,
     tables,
     problem,
+    exists: (family, choice, option) =>
+      family < 0 || choice === familyChoice || existence[family]?.[(offsets[choice] ?? 0) + option] === 1,
     assignment: assignmentReader(choices, familyChoice, offsets, existence),
   };
+}
+
+/** What the weight of a block reads besides the weights of its options. */
+const boringReads = {
+  choices: new Set<string>(),
+  values: new Set(["bore", "deckHeight", "baseDeckHeight", "baseBore", "barrelBottom", "cylinders"]),
+  words: new Set<string>(),
+  numbers: new Set<string>(),
+  figures: new Set(["deliveredBore"]),
+};
+
+function boringsOf(choices: readonly Choice[], ids: readonly string[]): Uint8Array {
+  return Uint8Array.from(choices, ({ id }) => Number(ids.includes(id)));
 }
 
 function familiesOf(catalogue: Catalogue, choice: Choice | undefined): Family[] {

@@ -3,10 +3,9 @@ import { compileCatalogue, type CompiledCatalogue } from "./compile.ts";
 import type { Assignment } from "./problem.ts";
 import { minimalConflict } from "./conflict.ts";
 import type { EvaluationContext, Mend } from "./evaluation.ts";
-import { existingOnly } from "./evaluate.ts";
 import { withWanted, type Wanted } from "./explain.ts";
 import { isPossible } from "./open-options.ts";
-import { createTotals, daysBetween, type Totals } from "./totals.ts";
+import { existingOnly, totalsOf, type Totals } from "./totals.ts";
 
 /**
  * The cheapest mend that lets a closed option in: fewest answers changed or dropped, then least net price increase, then days,
@@ -44,15 +43,15 @@ export function cheapestMend(
   if (isPossible(compiled, target, numbers)) return null;
   const mine = new Set(build.mine.flatMap((id) => compiled.choiceIndex.get(id) ?? []));
   if (question.held !== null) mine.add(question.held);
-  const totalsOf = createTotals(context, compiled, numbers);
-  const now = totalsOf(compiled.assignment(build.answers));
+  const totals = (assignment: Assignment): Totals | null => totalsOf(context, compiled, assignment, numbers);
+  const now = totals(compiled.assignment(build.answers));
   let best: Candidate | null = null;
   for (const start of starts(compiled, target, mine)) {
     const dropped = differing(target, start);
     const most = best === null ? Number.POSITIVE_INFINITY : best.changed.length - dropped.length;
     for (const freed of leastRelaxations(compiled, start, numbers, { fixed: mine, most })) {
       const floor = best === null || best.changed.length > dropped.length + freed.length ? null : best;
-      best = cheapestFilling({ compiled, target, start, freed, numbers, totalsOf, now }, floor);
+      best = cheapestFilling({ compiled, target, start, freed, numbers, totals, now }, floor);
     }
   }
   return best === null ? null : describe(compiled, target, best, now);
@@ -129,13 +128,13 @@ interface Filling {
   start: Assignment;
   freed: readonly number[];
   numbers: Readonly<Record<string, string>>;
-  totalsOf: (assignment: Assignment) => Totals | null;
+  totals: (assignment: Assignment) => Totals | null;
   now: Totals | null;
 }
 
 /** The cheapest way to answer the freed choices anew, or the best known if that is cheaper. */
 function cheapestFilling(filling: Filling, known: Candidate | null): Candidate | null {
-  const { compiled, target, start, freed, numbers, totalsOf } = filling;
+  const { compiled, target, start, freed, numbers, totals } = filling;
   let best = known;
   const given = without(start, freed);
   const fill = (at: number): void => {
@@ -144,7 +143,7 @@ function cheapestFilling(filling: Filling, known: Candidate | null): Candidate |
       const candidate = {
         assignment: given.slice(),
         changed: differing(target, given),
-        totals: totalsOf(given),
+        totals: totals(given),
       };
       if (best !== null && compareCandidates(candidate, best) >= 0) return;
       if (isPossible(compiled, given, numbers)) best = candidate;
@@ -169,7 +168,7 @@ function compareCandidates(a: Candidate, b: Candidate): number {
   if (a.totals !== null && b.totals !== null) {
     const price = a.totals.priceCents - b.totals.priceCents;
     if (price !== 0) return price;
-    const days = daysBetween(b.totals.shipsOn, a.totals.shipsOn);
+    const days = a.totals.ships.day - b.totals.ships.day;
     if (days !== 0) return days;
   }
   for (const [at, choice] of a.changed.entries()) {
@@ -196,6 +195,6 @@ function describe(
       to: idOf(choice, best.assignment[choice] ?? -1),
     })),
     priceCents: now === null || best.totals === null ? null : best.totals.priceCents - now.priceCents,
-    days: now === null || best.totals === null ? null : daysBetween(now.shipsOn, best.totals.shipsOn),
+    days: now === null || best.totals === null ? null : best.totals.ships.day - now.ships.day,
   };
 }

@@ -66,7 +66,9 @@ function product(sizes: readonly number[]): number {
 
 /** By choice: the options that exist and that no rule over this choice alone forbids; none at all where a rule forbids all. */
 function domainsOf(problem: Problem, offsets: readonly number[]): number[][] {
-  const never = problem.constraints.some(({ scope, allows }) => scope.length === 0 && !allows(0));
+  const never = problem.constraints.some(
+    (constraint) => constraint.scope.length === 0 && !constraint.allows(0),
+  );
   return problem.constraintsOf.map((constraints, choice) => {
     const own = constraints.filter(({ scope }) => scope.length === 1);
     const from = offsets[choice] ?? 0;
@@ -75,7 +77,7 @@ function domainsOf(problem: Problem, offsets: readonly number[]): number[][] {
       (option) =>
         !never &&
         problem.exists[from + option] === 1 &&
-        own.every(({ allows, strides }) => allows(option * (strides[0] ?? 1))),
+        own.every((constraint) => constraint.allows(option * (constraint.strides[0] ?? 1))),
     );
   });
 }
