@@ -15,6 +15,8 @@ export interface FigureDefinition {
   numbers?: readonly string[];
   choices?: readonly string[];
   compute(reading: Reading, catalogue: Catalogue): number | null;
+  /** True for a figure that is of no interest until what it reads is known. */
+  shownOnceKnown?: boolean;
   /** Where in the engine the figure is taken, for the drawing. */
   at?(reading: Reading, catalogue: Catalogue): Figure["at"] | null;
 }

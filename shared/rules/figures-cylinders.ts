@@ -88,6 +88,7 @@ export const cylinderFigures: readonly FigureDefinition[] = [
     formula: "greatest difference of skirt + clearance asked from the finish bore, over the eight cylinders",
     values: ["bore"],
     numbers: honedNumbers,
+    shownOnceKnown: true,
     compute(reading) {
       const cylinders = honedTo(reading);
       const finishBore = reading.value("bore");
@@ -132,6 +133,7 @@ export const cylinderFigures: readonly FigureDefinition[] = [
     formula: "gasket bore − finish bore, or the largest honed cylinder",
     values: ["bore"],
     numbers: ["gasketBore", ...honedNumbers],
+    shownOnceKnown: true,
     compute(reading) {
       const gasketBore = reading.number("gasketBore");
       const bore = widest(reading);
@@ -169,6 +171,7 @@ export const cylinderFigures: readonly FigureDefinition[] = [
     formula:
       "chamber + π/4 × gasket bore² × gasket thickness + π/4 × bore² × deck clearance + dish (a dome is negative)",
     ...clearanceReads,
+    shownOnceKnown: true,
     compute: clearance,
   },
   {
