@@ -96,11 +96,7 @@ export const castingRules: RuleDocument[] = [
     severity: "stop",
     sentence: "The gasket's opening must be at least 0.010 in larger than the finish bore.",
     why: `A gasket edge that stands in the cylinder burns and is hit by the piston. ${fromMemory}`,
-    require: {
-      left: { difference: [{ number: "gasketBore" }, { value: "bore" }] },
-      is: ">=",
-      right: { constant: 0.01 },
-    },
+    require: figureAtLeast("gasketOverBore", 0.01),
   },
   {
     id: "honed-cylinders-near-bore",

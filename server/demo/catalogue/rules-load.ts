@@ -1,5 +1,5 @@
 import type { RuleDocument } from "./document.ts";
-import { choice, common, figureAtMost, invented, numberAtMost, rodKind } from "./rule-parts.ts";
+import { choice, common, figureAtMost, fromMemory, invented, numberAtMost, rodKind } from "./rule-parts.ts";
 
 /** What the load asks of caps, iron and fasteners. */
 export const loadRules: RuleDocument[] = [
@@ -146,5 +146,23 @@ export const loadRules: RuleDocument[] = [
     why: `Aluminium tires with every load, however small. ${common}`,
     when: rodKind("aluminium"),
     require: choice("duty", "drag"),
+  },
+  {
+    id: "compression-pump-fuel",
+    kind: "expression",
+    severity: "caution",
+    sentence: "On pump fuel, a compression ratio above 11.0 needs a cam and tuning that bear it.",
+    why: `Pressure and heat set the charge off by itself. ${fromMemory}`,
+    when: { all: [choice("duty", "street"), choice("induction", "naturallyAspirated")] },
+    require: figureAtMost("compressionRatio", 11),
+  },
+  {
+    id: "compression-boosted",
+    kind: "expression",
+    severity: "caution",
+    sentence: "With boost, a compression ratio above 10.0 leaves little room before the charge knocks.",
+    why: `Boost multiplies the pressure that compression makes. ${fromMemory}`,
+    when: choice("induction", "boosted"),
+    require: figureAtMost("compressionRatio", 10),
   },
 ];
