@@ -2,7 +2,7 @@ import type { Catalogue, Choice, Family, NumberField } from "../catalogue/catalo
 import { compileRule, dependenciesOf, gatesOf, suppliersOf, type CompiledRule } from "./compile-rule.ts";
 import { figureDefinitions, type FigureDefinition } from "./figures.ts";
 import { createProblem, type Assignment, type Problem } from "./problem.ts";
-import { createReading, type Reading } from "./reading.ts";
+import { createReading, type LiveReading, type Reading } from "./reading.ts";
 import { createRuleTables, type CellVerdict, type Numbers, type RuleTable } from "./rule-table.ts";
 import { isIdle, judge } from "./verdict.ts";
 
@@ -21,7 +21,7 @@ export interface CompiledCatalogue {
   borings: Uint8Array;
   /** Families by option index of the family choice. */
   families: readonly Family[];
-  reading(family: number, optionIndexOf: (choice: number) => number, numbers: Numbers): Reading;
+  reading(family: number, optionIndexOf: (choice: number) => number, numbers: Numbers): LiveReading;
   /** The verdict tables of all rules, as `rules`, for a family (-1 = none) at the typed numbers. */
   tables(family: number, numbers: Numbers): readonly RuleTable[];
   /** The stop rules of a family at the typed numbers; the same object for the same numbers that stop rules read. */
@@ -83,11 +83,14 @@ function compile(catalogue: Catalogue): CompiledCatalogue {
   const stops = rules.filter(({ rule }) => rule.severity === "stop");
   const optionGates = gateIndices(gates, choices, choiceIndex);
   const ruleTables = rules.map((entry) =>
-    createRuleTables(entry, choices, optionGates, (family, optionIndexOf, numbers): CellVerdict => {
+    createRuleTables(entry, choices, optionGates, (family, optionIndexOf, numbers) => {
       const read = reading(family, optionIndexOf, numbers);
-      const verdict = judge(entry.rule, read);
-      if (verdict !== "undecided") return verdict === "kept" ? 1 : 2;
-      return isIdle(entry.rule, read) ? 4 : 3;
+      return (): CellVerdict => {
+        read.forget();
+        const verdict = judge(entry.rule, read);
+        if (verdict !== "undecided") return verdict === "kept" ? 1 : 2;
+        return isIdle(entry.rule, read) ? 4 : 3;
+      };
     }),
   );
   const existence = existenceOf(families, choices, familyChoice);

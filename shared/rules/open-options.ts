@@ -3,7 +3,7 @@ import { createJoinTree, type JoinTree } from "./join-tree.ts";
 import { keepBuild, markBuild, markKept } from "./kept-builds.ts";
 import type { Assignment, Problem } from "./problem.ts";
 import type { Numbers } from "./rule-table.ts";
-import { findExtension } from "./search.ts";
+import { findExtension, startSearch } from "./search.ts";
 
 const trees = new WeakMap<Problem, JoinTree | null>();
 
@@ -60,30 +60,41 @@ function searchOpen(
   open: Uint8Array,
 ): void {
   const { offsets, choices, familyChoice } = compiled;
-  const own = new Uint8Array(open.length);
-  markKept(problem, given, offsets, own);
-  const attempt = (trial: Assignment): boolean => {
-    const found = findExtension(compiled, problem, trial, { seen: own });
-    if (found === null) return false;
+  const seen = new Uint8Array(open.length);
+  markKept(problem, given, offsets, seen);
+  const keep = (found: Assignment | null): void => {
+    if (found === null) return;
     keepBuild(problem, found);
-    markBuild(found, given, offsets, own);
-    return true;
+    markBuild(found, given, offsets, seen);
   };
   const chosen = given[familyChoice] ?? -1;
-  const here = chosen < 0 || chosen === problem.family;
-  const possible = here && attempt(given);
-  choices.forEach((_, choice) => {
-    if (given[choice] === -1 && !possible) return;
-    if (!here && choice !== familyChoice) return;
+  if (chosen >= 0 && chosen !== problem.family) {
     const trial = given.slice();
-    const from = offsets[choice] ?? 0;
-    for (let at = from; at < (offsets[choice + 1] ?? from); at += 1) {
-      if (own[at] === 1 || problem.exists[at] !== 1) continue;
-      trial[choice] = at - from;
-      attempt(trial);
-    }
-  });
-  own.forEach((mark, at) => {
+    trial[familyChoice] = problem.family;
+    keep(findExtension(compiled, problem, trial));
+  } else {
+    const whole = startSearch(compiled, problem, given, { seen });
+    choices.forEach((_, choice) => {
+      const from = offsets[choice] ?? 0;
+      if (given[choice] !== -1 || whole === null) return;
+      for (const option of whole.left(choice)) {
+        if (seen[from + option] === 0) keep(whole.attempt(choice, option));
+      }
+    });
+    choices.forEach((_, choice) => {
+      if (given[choice] === -1 || choice === familyChoice) return;
+      const from = offsets[choice] ?? 0;
+      const trial = given.slice();
+      trial[choice] = -1;
+      const freed = startSearch(compiled, problem, trial, { seen });
+      for (const option of freed?.left(choice) ?? []) {
+        if (seen[from + option] === 0) keep(freed?.attempt(choice, option) ?? null);
+      }
+    });
+    if (chosen === problem.family && whole !== null && seen[(offsets[familyChoice] ?? 0) + chosen] === 0)
+      keep(whole.attempt());
+  }
+  seen.forEach((mark, at) => {
     if (mark === 1) open[at] = 1;
   });
 }

@@ -17,12 +17,12 @@ export interface RuleTable {
   verdict(cell: number): CellVerdict;
 }
 
-/** Judges a rule for a family, the scope's answers (-1 = none) and numbers. */
-export type Judge = (
+/** A judge of the rule for a family and numbers; every time it is asked it reads the scope's answers (-1 = none) anew. */
+export type CreateJudge = (
   family: number,
   optionIndexOf: (choice: number) => number,
   numbers: Numbers,
-) => CellVerdict;
+) => () => CellVerdict;
 
 /** Verdicts that are kept; a larger table judges every cell anew. */
 const mostCells = 1 << 20;
@@ -39,7 +39,7 @@ export function createRuleTables(
   entry: CompiledRule,
   choices: readonly Choice[],
   gates: ReadonlyMap<string, readonly (readonly [number, number])[]>,
-  judge: Judge,
+  createJudge: CreateJudge,
 ): RuleTables {
   const { scope } = entry;
   const sizes = scope.map((choice) => (choices[choice]?.options.length ?? 0) + 1);
@@ -57,8 +57,14 @@ export function createRuleTables(
     numbers: Numbers,
     unaffected: (cell: number) => RuleTable | null,
   ): RuleTable => {
-    const judgeCell = (cell: number): CellVerdict =>
-      unaffected(cell)?.verdict(cell) ?? judge(family, (choice) => optionAt(cell, choice), numbers);
+    let asked = 0;
+    const judge = createJudge(family, (choice) => optionAt(asked, choice), numbers);
+    const judgeCell = (cell: number): CellVerdict => {
+      const same = unaffected(cell);
+      if (same !== null) return same.verdict(cell);
+      asked = cell;
+      return judge();
+    };
     if (cells > mostCells) return { scope, strides, verdict: judgeCell };
     let known: Uint8Array | null = null;
     return {

@@ -2,10 +2,18 @@ import type { CompiledCatalogue } from "./compile.ts";
 import type { Assignment, Constraint, Problem } from "./problem.ts";
 
 export interface SearchWishes {
-  /** By flat option index: options to try last (they have a witness already). */
+  /** By flat option index: options to try last (they have a witness already). Read anew by every attempt. */
   seen?: Uint8Array;
   /** By stop rule: 1 = leave this rule out. */
   without?: Uint8Array;
+}
+
+/** What is left of every choice's options once the answers are given; asked for builds that extend them. */
+export interface OpenSearch {
+  /** Options of a choice that are not ruled out at once, as option indices. */
+  left(choice: number): number[];
+  /** A full assignment, with this option of this choice if they are given, that breaks no stop rule; null = there is none. */
+  attempt(choice?: number, option?: number): Assignment | null;
 }
 
 /** A search over one problem; options left are bits, 32 to a word, and what is taken away is undone by the trail. */
@@ -21,25 +29,49 @@ interface Search {
   trail: number[];
   queue: number[];
   queued: Uint8Array;
+  /** Decisions taken back since the attempt began. */
+  setbacks: number;
 }
 
+/** Above so many decisions taken back, choices that no rule joins any more are told apart. */
+const easySetbacks = 24;
+
 /**
- * A full assignment of one family that extends the answers given and breaks no stop rule, or null if there is none.
+ * Starts a search in one family with the answers given; null where they cannot stand together at once.
  * Depth first: a rule of two choices keeps only options that the other side supports (arc consistency); a longer rule is asked
- * when at most one of its choices is undecided. Choices that no rule joins any more are decided apart. Complete: null means
- * that none exists.
+ * when at most one of its choices is undecided. Complete: null from an attempt means that no such build exists.
  */
+export function startSearch(
+  compiled: CompiledCatalogue,
+  problem: Problem,
+  given: Assignment,
+  wishes: SearchWishes = {},
+): OpenSearch | null {
+  const search = prepare(compiled, problem, given, wishes);
+  if (search === null || !propagate(search)) return null;
+  const every = compiled.choices.map((_, choice) => choice);
+  const root = search.trail.length;
+  return {
+    left: (choice) => optionsOf(search, choice),
+    attempt(choice, option) {
+      search.setbacks = 0;
+      if (choice !== undefined && option !== undefined) decide(search, choice, option);
+      const found = propagate(search) && decideAll(search, every);
+      const build = found ? Int16Array.from(every, (one) => firstOf(search, one)) : null;
+      undo(search, root);
+      return build;
+    },
+  };
+}
+
+/** A full assignment of one family that extends the answers given and breaks no stop rule, or null if there is none. */
 export function findExtension(
   compiled: CompiledCatalogue,
   problem: Problem,
   given: Assignment,
   wishes: SearchWishes = {},
 ): Assignment | null {
-  const search = prepare(compiled, problem, given, wishes);
-  if (search === null || !propagate(search)) return null;
-  const every = compiled.choices.map((_, choice) => choice);
-  if (!decideAll(search, every)) return null;
-  return Int16Array.from(every, (choice) => firstOf(search, choice));
+  return startSearch(compiled, problem, given, wishes)?.attempt() ?? null;
 }
 
 /** Offsets of each choice's first word. */
@@ -70,6 +102,7 @@ function prepare(
     trail: [],
     queue: [],
     queued: new Uint8Array(choices.length),
+    setbacks: 0,
   };
   for (let choice = 0; choice < choices.length; choice += 1) {
     const from = offsets[choice] ?? 0;
@@ -261,14 +294,15 @@ function optionsOf({ words, wordOffsets }: Search, choice: number): number[] {
 }
 
 /**
- * Decides the given choices. They fall into groups that no rule joins any more; each group is decided by itself, and if one cannot
- * be, no other answer elsewhere would help.
+ * Decides the given choices. When that is not easy they are told apart into groups that no rule joins any more; each group is
+ * decided by itself, and if one cannot be, no other answer elsewhere would help.
  */
 function decideAll(search: Search, among: readonly number[]): boolean {
+  if (search.setbacks < easySetbacks) return decideNext(search, among);
   const grouped = new Uint8Array(search.sizes.length);
   for (const choice of among) {
     if (search.sizes[choice] === 1 || grouped[choice] === 1) continue;
-    if (!decideGroup(search, groupOf(search, choice, grouped))) return false;
+    if (!decideNext(search, groupOf(search, choice, grouped))) return false;
   }
   return true;
 }
@@ -290,24 +324,32 @@ function groupOf({ problem, sizes, wishes }: Search, first: number, grouped: Uin
   return group;
 }
 
-/** Decides one group: the choice with the fewest options left first, options without a witness before the others. */
-function decideGroup(search: Search, group: readonly number[]): boolean {
-  const { sizes, wishes, offsets, problem } = search;
-  let choice = group[0] ?? 0;
-  for (const other of group) {
-    const fewer = (sizes[other] ?? 0) - (sizes[choice] ?? 0);
-    const joined = (problem.constraintsOf[other]?.length ?? 0) - (problem.constraintsOf[choice]?.length ?? 0);
-    if (fewer < 0 || (fewer === 0 && joined > 0)) choice = other;
+/** Decides the choice with the fewest options left, options without a witness before the others, and then the rest. */
+function decideNext(search: Search, among: readonly number[]): boolean {
+  const { sizes, offsets, problem } = search;
+  let choice = -1;
+  let fewest = Number.POSITIVE_INFINITY;
+  for (const other of among) {
+    const size = sizes[other] ?? 0;
+    if (size === 1 || size > fewest) continue;
+    const joined = problem.constraintsOf[other]?.length ?? 0;
+    if (size === fewest && joined <= (problem.constraintsOf[choice]?.length ?? 0)) continue;
+    choice = other;
+    fewest = size;
   }
-  const from = offsets[choice] ?? 0;
+  if (choice < 0) return true;
   const options = optionsOf(search, choice);
-  const { seen } = wishes;
-  if (seen !== undefined) options.sort((a, b) => (seen[from + a] ?? 0) - (seen[from + b] ?? 0) || a - b);
-  for (const option of options) {
-    const mark = search.trail.length;
-    decide(search, choice, option);
-    if (propagate(search) && decideAll(search, group)) return true;
-    undo(search, mark);
+  const { seen } = search.wishes;
+  const from = offsets[choice] ?? 0;
+  for (const last of [0, 1]) {
+    for (const option of options) {
+      if ((seen?.[from + option] ?? 0) !== last) continue;
+      const mark = search.trail.length;
+      decide(search, choice, option);
+      if (propagate(search) && decideAll(search, among)) return true;
+      undo(search, mark);
+      search.setbacks += 1;
+    }
   }
   return false;
 }
