@@ -28,7 +28,9 @@ export interface CompiledCatalogue {
   problem(family: number, numbers: Numbers): Problem;
   /** Whether a choice's option exists in the family (any without one); all families exist. */
   exists(family: number, choice: number, option: number): boolean;
-  /** Known answers of a build: option indices, unknown or nonexistent ones left out. */
+  /** Answers of a build that the catalogue knows, as option indices, whether they exist in its family or not. */
+  known(answers: Readonly<Record<string, string>>): Assignment;
+  /** The same without those that do not exist in its family. */
   assignment(answers: Readonly<Record<string, string>>): Assignment;
 }
 
@@ -106,6 +108,10 @@ function compile(catalogue: Catalogue): CompiledCatalogue {
     ),
   );
 
+  const known = answerReader(choices);
+  const exists: CompiledCatalogue["exists"] = (family, choice, option) =>
+    family < 0 || choice === familyChoice || existence[family]?.[(offsets[choice] ?? 0) + option] === 1;
+
   return {
     catalogue,
     choices,
@@ -121,9 +127,13 @@ function compile(catalogue: Catalogue): CompiledCatalogue {
     reading,
     tables,
     problem,
-    exists: (family, choice, option) =>
-      family < 0 || choice === familyChoice || existence[family]?.[(offsets[choice] ?? 0) + option] === 1,
-    assignment: assignmentReader(choices, familyChoice, offsets, existence),
+    exists,
+    known,
+    assignment(answers) {
+      const given = known(answers);
+      const family = given[familyChoice] ?? -1;
+      return given.map((option, choice) => (option < 0 || exists(family, choice, option) ? option : -1));
+    },
   };
 }
 
@@ -206,22 +216,8 @@ function keptByNumbers<Made>(
   };
 }
 
-function assignmentReader(
-  choices: readonly Choice[],
-  familyChoice: number,
-  offsets: readonly number[],
-  existence: readonly Uint8Array[],
-): CompiledCatalogue["assignment"] {
+function answerReader(choices: readonly Choice[]): CompiledCatalogue["known"] {
   const indices = choices.map(({ options }) => new Map(options.map(({ id }, at) => [id, at])));
-  return (answers) => {
-    const assignment = new Int16Array(choices.length).fill(-1);
-    const family = indices[familyChoice]?.get(answers["family"] ?? "") ?? -1;
-    choices.forEach((choice, index) => {
-      const at = indices[index]?.get(answers[choice.id] ?? "") ?? -1;
-      if (at < 0) return;
-      const exists = family < 0 || existence[family]?.[(offsets[index] ?? 0) + at] === 1;
-      assignment[index] = exists ? at : -1;
-    });
-    return assignment;
-  };
+  return (answers) =>
+    Int16Array.from(choices, ({ id }, choice) => indices[choice]?.get(answers[id] ?? "") ?? -1);
 }

@@ -4,7 +4,7 @@ import { compileCatalogue, type CompiledCatalogue } from "./compile.ts";
 import type { Assignment } from "./problem.ts";
 import type { ChoiceState, Evaluation, EvaluationContext, OptionEffect } from "./evaluation.ts";
 import { figuresOf, findingsOf } from "./findings.ts";
-import { openOptions } from "./open-options.ts";
+import { openFlags } from "./open-options.ts";
 import { createEffects } from "./totals.ts";
 
 /**
@@ -18,7 +18,7 @@ export function evaluate(context: EvaluationContext, build: Build): Evaluation {
   const family = assignment[compiled.familyChoice] ?? -1;
   const reading = compiled.reading(family, (choice) => assignment[choice] ?? -1, build.numbers);
   const { totals, effectOf } = createEffects(context, compiled, assignment, build.numbers);
-  const open = openOptions(compiled, assignment, build.numbers);
+  const open = openFlags(compiled, assignment, build.numbers);
   const findings = findingsOf(compiled, assignment, build.numbers);
   const unanswered = unansweredChoices(compiled, assignment);
   return {

@@ -1,4 +1,6 @@
-import type { CompiledCatalogue } from "./compile.ts";
+import type { Build } from "../catalogue/build.ts";
+import { compileCatalogue, type CompiledCatalogue } from "./compile.ts";
+import type { EvaluationContext } from "./evaluation.ts";
 import { createJoinTree, type JoinTree } from "./join-tree.ts";
 import { keepBuild, markBuild, markKept } from "./kept-builds.ts";
 import type { Assignment, Problem } from "./problem.ts";
@@ -37,10 +39,39 @@ export function isPossible(compiled: CompiledCatalogue, given: Assignment, numbe
 }
 
 /**
- * Open options by flat option index (1 = open): some full valid build has that option and extends the other answers, the
- * choice's own answer left out.
+ * The open options of every choice, in catalogue order: some full valid build has that option and extends the other answers, the
+ * choice's own answer left out. Throws RangeError on a catalogue that is not sound.
  */
-export function openOptions(compiled: CompiledCatalogue, given: Assignment, numbers: Numbers): Uint8Array {
+export function openOptions(
+  { catalogue }: Pick<EvaluationContext, "catalogue">,
+  build: Build,
+): Map<string, string[]> {
+  const compiled = compileCatalogue(catalogue);
+  const open = openFlags(compiled, compiled.assignment(build.answers), build.numbers);
+  return new Map(
+    compiled.choices.map(({ id, options }, choice) => [
+      id,
+      options.flatMap((option, at) => (open[(compiled.offsets[choice] ?? 0) + at] === 1 ? [option.id] : [])),
+    ]),
+  );
+}
+
+/**
+ * How many valid full builds extend the answers at the present typed numbers, exactly; own numbers count as one option.
+ * Throws RangeError where the rules join too many choices to be counted.
+ */
+export function count({ catalogue }: Pick<EvaluationContext, "catalogue">, build: Build): bigint {
+  const compiled = compileCatalogue(catalogue);
+  const given = compiled.assignment(build.answers);
+  return problemsFor(compiled, given, build.numbers).reduce((sum, problem) => {
+    const tree = treeOf(compiled, problem);
+    if (tree === null) throw new RangeError("the rules join too many choices to be counted");
+    return sum + tree.count(given);
+  }, 0n);
+}
+
+/** Open options by flat option index (1 = open). */
+export function openFlags(compiled: CompiledCatalogue, given: Assignment, numbers: Numbers): Uint8Array {
   const open = new Uint8Array(compiled.offsets.at(-1) ?? 0);
   // Every family is asked: those not chosen can be open themselves.
   for (const family of compiled.families.keys()) {
