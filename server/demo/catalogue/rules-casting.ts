@@ -103,7 +103,7 @@ export const castingRules: RuleDocument[] = [
     kind: "expression",
     severity: "stop",
     sentence:
-      "Honed to your pistons, every skirt plus the clearance must come within 0.0025 in of the bore chosen. It needs eight skirts and the clearance.",
+      "Honed to your pistons, each of the eight skirts plus the clearance must come within 0.0025 in of the bore chosen.",
     why: `Further off, the next bore in steps of 0.005 in is the nearer one. ${invented}`,
     when: choice("boreFinish", "honedToMyPistons"),
     require: {
