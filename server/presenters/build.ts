@@ -42,7 +42,8 @@ export function presentBuild({ catalogue, priceList }: EvaluationContext, evalua
   };
 }
 
-function namedAnswers(catalogue: Catalogue, answers: Record<string, string>): BuildView["answers"] {
+/** Every answer in the words of the catalogue, in step order. */
+export function namedAnswers(catalogue: Catalogue, answers: Record<string, string>): BuildView["answers"] {
   return catalogue.steps.flatMap((step) =>
     step.choices.flatMap((id) => {
       const choice = catalogue.choices.find((candidate) => candidate.id === id);
@@ -53,7 +54,7 @@ function namedAnswers(catalogue: Catalogue, answers: Record<string, string>): Bu
 }
 
 /** "Marl, 4.125 in bore, 9.025 in deck": the family and what tells its blocks apart. */
-function summaryOf(catalogue: Catalogue, answers: Record<string, string>): string {
+export function summaryOf(catalogue: Catalogue, answers: Record<string, string>): string {
   const optionName = (choiceId: string): string | undefined =>
     catalogue.choices
       .find((choice) => choice.id === choiceId)

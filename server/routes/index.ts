@@ -8,6 +8,7 @@ import { messageRoutes } from "./messages.ts";
 import { orderLinkRoutes } from "./order-link.ts";
 import { orderRoutes } from "./orders.ts";
 import { sessionRoutes } from "./session.ts";
+import { targetRoutes } from "./targets.ts";
 
 /** Every route that asks a policy. What is not in this list is not served. */
 export const routes: readonly Route[] = [
@@ -15,6 +16,7 @@ export const routes: readonly Route[] = [
   ...accountRoutes,
   ...catalogueRoutes,
   ...buildRoutes,
+  ...targetRoutes,
   ...cartRoutes,
   ...checkoutRoutes,
   ...orderRoutes,

@@ -18,6 +18,8 @@ const limits = {
   "password by account": { points: 10, duration: 15 * MINUTE },
   "order by address": { points: 200, duration: HOUR },
   "order link by address": { points: 30, duration: HOUR },
+  "target by address": { points: 600, duration: HOUR },
+  "mend by address": { points: 1200, duration: HOUR },
 } as const;
 
 export type RateLimit = keyof typeof limits;

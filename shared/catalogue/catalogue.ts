@@ -70,6 +70,8 @@ export const numberFieldSchema = z.object({
   step: z.number().positive(),
   least: z.number(),
   most: z.number(),
+  /** Heading under which the step form shows it together with its neighbours of the same group. */
+  group: z.string().default(""),
   hint: z.string().default(""),
   /** Only read while this option of this choice is in the build; absent = always. */
   onlyWith: z.object({ choice: identifier, option: identifier }).optional(),

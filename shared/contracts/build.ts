@@ -57,3 +57,32 @@ export const buildViewSchema = z.object({
   shipsOn: z.iso.date(),
 });
 export type BuildView = z.infer<typeof buildViewSchema>;
+
+/** POST /api/builds/mend: a closed option to let in, or, without one, a whole build to repair. */
+export const mendRequestSchema = buildRequestSchema.extend({
+  /** Choices whose answers stay. */
+  mine: z.array(z.string().max(40)).max(100).default([]),
+  wanted: z.object({ choice: z.string().max(40), option: z.string().max(40) }).optional(),
+});
+export type MendRequest = z.infer<typeof mendRequestSchema>;
+
+/** Both null: the option is open, or nothing is to be repaired. A reason without a mend: nothing helps. */
+export const mendResultSchema = z.object({
+  reason: z
+    .object({
+      sentence: z.string(),
+      answers: z.array(z.object({ choice: z.string(), option: z.string() })),
+      numbers: z.array(z.string()),
+      rules: z.array(z.string()),
+    })
+    .nullable(),
+  mend: z
+    .object({
+      /** Option ids; `to` is null where the answer is dropped. */
+      changes: z.array(z.object({ choice: z.string(), from: z.string(), to: z.string().nullable() })),
+      priceCents: z.int().nullable(),
+      days: z.int().nullable(),
+    })
+    .nullable(),
+});
+export type MendResult = z.infer<typeof mendResultSchema>;

@@ -1,20 +1,18 @@
+import { givenAbove } from "./given.ts";
+
 /** 1 in = 0.0254 m exactly. */
 const metresPerInch = 0.0254;
 
 /** (rev/min, cu in, psi) to hp of a four-stroke: 33,000 ft lbf/min x 12 in/ft x 2 rev per working stroke. */
 const powerConstant = 792_000;
 
-function above(name: string, quantity: number): void {
-  if (!(quantity > 0) || !Number.isFinite(quantity)) throw new RangeError(`${name} must be above zero`);
-}
-
 /** Mean piston speed, 2 stroke rpm: m/s and ft/min. Stroke in inches. */
 export function meanPistonSpeed(input: { stroke: number; rpm: number }): {
   metresPerSecond: number;
   feetPerMinute: number;
 } {
-  above("the stroke", input.stroke);
-  above("the engine speed", input.rpm);
+  givenAbove("the stroke", input.stroke);
+  givenAbove("the engine speed", input.rpm);
   return {
     metresPerSecond: (2 * input.stroke * metresPerInch * input.rpm) / 60,
     feetPerMinute: (input.stroke * input.rpm) / 6,
@@ -27,9 +25,9 @@ export function brakeMeanEffectivePressure(input: {
   cubicInches: number;
   rpm: number;
 }): number {
-  above("the power", input.horsepower);
-  above("the displacement", input.cubicInches);
-  above("the engine speed", input.rpm);
+  givenAbove("the power", input.horsepower);
+  givenAbove("the displacement", input.cubicInches);
+  givenAbove("the engine speed", input.rpm);
   return (powerConstant * input.horsepower) / (input.cubicInches * input.rpm);
 }
 
@@ -41,10 +39,11 @@ export function powerRange(input: { cubicInches: number; rpm: number; low: numbe
   low: number;
   high: number;
 } {
-  above("the displacement", input.cubicInches);
-  above("the engine speed", input.rpm);
-  above("the mean effective pressure", input.low);
-  if (!(input.high >= input.low)) throw new RangeError("the range of mean effective pressure is upside down");
+  givenAbove("the displacement", input.cubicInches);
+  givenAbove("the engine speed", input.rpm);
+  givenAbove("the mean effective pressure", input.low);
+  givenAbove("the higher mean effective pressure", input.high);
+  if (input.high < input.low) throw new RangeError("the range of mean effective pressure is upside down");
   const perPressure = (input.cubicInches * input.rpm) / powerConstant;
   return { low: input.low * perPressure, high: input.high * perPressure };
 }

@@ -1,5 +1,8 @@
-import type { Assignment, CompiledCatalogue } from "./compile.ts";
-import { findInAnyFamily } from "./open-options.ts";
+import type { CompiledCatalogue } from "./compile.ts";
+import { problemsFor } from "./open-options.ts";
+import type { Assignment } from "./problem.ts";
+import type { Numbers } from "./rule-table.ts";
+import { findExtension } from "./search.ts";
 
 /** What together leaves no valid build. */
 export interface Conflict {
@@ -14,48 +17,77 @@ export interface Conflict {
 export interface ConflictQuestion {
   compiled: CompiledCatalogue;
   given: Assignment;
-  numbers: Readonly<Record<string, string>>;
+  numbers: Numbers;
   /** Choices whose answers are held in any case, such as the wanted option's; they are not named in the conflict. */
   held: ReadonlySet<number>;
   heldNumber?: string;
 }
 
 /**
+ * The elements of a conflict of which no proper subset is one; null where all of them together are none. What comes later is left
+ * out rather than what comes first. (U. Junker, QuickXplain, AAAI 2004.)
+ * @param conflicts whether these elements, with what is held in any case, conflict; more elements never stop conflicting
+ */
+export function quickXplain<Element>(
+  elements: readonly Element[],
+  conflicts: (among: readonly Element[]) => boolean,
+): Element[] | null {
+  if (!conflicts(elements)) return null;
+  if (conflicts([])) return [];
+  return narrow([], elements, conflicts);
+}
+
+/** Those of the elements that the base needs to become a conflict; the base alone is none. */
+function narrow<Element>(
+  base: readonly Element[],
+  elements: readonly Element[],
+  conflicts: (among: readonly Element[]) => boolean,
+): Element[] {
+  if (elements.length === 1) return [...elements];
+  const half = Math.ceil(elements.length / 2);
+  const first = elements.slice(0, half);
+  const withFirst = [...base, ...first];
+  const second = conflicts(withFirst) ? [] : narrow(withFirst, elements.slice(half), conflicts);
+  const withSecond = [...base, ...second];
+  return conflicts(withSecond) ? second : [...narrow(withSecond, first, conflicts), ...second];
+}
+
+type Part = { number: string } | { choice: number } | { stop: number };
+
+/**
  * A minimal conflict: stop rules, answers and typed numbers that leave no valid build, while leaving out any one of them does.
- * Null when there is a valid build. Deletion filter: each element is left out in turn for good if the rest still conflicts;
- * sound because leaving out a rule, an answer or a number (unknown then) never closes anything.
+ * Null when there is a valid build. Sound because leaving out a rule, an answer or a number (unknown then) never closes anything.
  */
 export function minimalConflict(question: ConflictQuestion): Conflict | null {
-  const { compiled, held, heldNumber } = question;
-  const given = question.given.slice();
-  const numbers = { ...question.numbers };
-  const without = new Uint8Array(compiled.stops.length);
-  const blocked = (): boolean => findInAnyFamily(compiled, given, numbers, { without }) === null;
-  if (!blocked()) return null;
-
-  const stops: number[] = [];
-  for (let stop = compiled.stops.length - 1; stop >= 0; stop -= 1) {
-    without[stop] = 1;
-    if (blocked()) continue;
-    without[stop] = 0;
-    stops.unshift(stop);
-  }
-  const choices: number[] = [];
-  for (let choice = compiled.choices.length - 1; choice >= 0; choice -= 1) {
-    const answer = given[choice] ?? -1;
-    if (answer < 0 || held.has(choice)) continue;
-    given[choice] = -1;
-    if (blocked()) continue;
-    given[choice] = answer;
-    choices.unshift(choice);
-  }
-  const kept: string[] = [];
-  for (const [id, text] of Object.entries(question.numbers)) {
-    if (id === heldNumber) continue;
-    delete numbers[id];
-    if (blocked()) continue;
-    numbers[id] = text;
-    kept.push(id);
-  }
-  return { stops, choices, numbers: kept };
+  const { compiled, given, numbers, held, heldNumber } = question;
+  const typed = Object.keys(numbers).filter((id) => id !== heldNumber);
+  const answered = [...given.keys()].filter((choice) => given[choice] !== -1 && !held.has(choice));
+  const parts: Part[] = [
+    ...typed.map((number) => ({ number })).reverse(),
+    ...answered.map((choice) => ({ choice })),
+    ...compiled.stops.map((_, stop) => ({ stop })),
+  ];
+  const found = quickXplain(parts, (among) => {
+    const without = new Uint8Array(compiled.stops.length).fill(1);
+    const kept = given.slice();
+    for (const choice of answered) kept[choice] = -1;
+    const known = Object.fromEntries(
+      Object.entries(numbers).filter(
+        ([id]) => id === heldNumber || among.some((part) => "number" in part && part.number === id),
+      ),
+    );
+    for (const part of among) {
+      if ("stop" in part) without[part.stop] = 0;
+      else if ("choice" in part) kept[part.choice] = given[part.choice] ?? -1;
+    }
+    return problemsFor(compiled, kept, known).every(
+      (problem) => findExtension(compiled, problem, kept, { without }) === null,
+    );
+  });
+  if (found === null) return null;
+  return {
+    stops: found.flatMap((part) => ("stop" in part ? [part.stop] : [])),
+    choices: found.flatMap((part) => ("choice" in part ? [part.choice] : [])),
+    numbers: found.flatMap((part) => ("number" in part ? [part.number] : [])).reverse(),
+  };
 }

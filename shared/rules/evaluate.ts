@@ -1,10 +1,11 @@
 import type { Build } from "../catalogue/build.ts";
 import { priceBuild } from "../pricing/price-build.ts";
-import { compileCatalogue, type Assignment, type CompiledCatalogue } from "./compile.ts";
+import { compileCatalogue, type CompiledCatalogue } from "./compile.ts";
+import type { Assignment } from "./problem.ts";
 import type { ChoiceState, Evaluation, EvaluationContext, OptionEffect } from "./evaluation.ts";
 import { figuresOf, findingsOf } from "./findings.ts";
-import { openOptions } from "./open-options.ts";
-import { createTotals, daysBetween, type Totals } from "./totals.ts";
+import { openFlags } from "./open-options.ts";
+import { createEffects } from "./totals.ts";
 
 /**
  * Everything about a partial build: for every option whether it is open and what it changes; figures, findings, price, weight,
@@ -16,14 +17,13 @@ export function evaluate(context: EvaluationContext, build: Build): Evaluation {
   const assignment = compiled.assignment(build.answers);
   const family = assignment[compiled.familyChoice] ?? -1;
   const reading = compiled.reading(family, (choice) => assignment[choice] ?? -1, build.numbers);
-  const totalsOf = createTotals(context, compiled, build.numbers);
-  const totals = totalsOf(assignment);
-  const open = openOptions(compiled, assignment, build.numbers);
-  const findings = findingsOf(compiled, assignment, reading);
+  const { totals, effectOf } = createEffects(context, compiled, assignment, build.numbers);
+  const open = openFlags(compiled, assignment, build.numbers);
+  const findings = findingsOf(compiled, assignment, build.numbers);
   const unanswered = unansweredChoices(compiled, assignment);
   return {
     build,
-    choices: choiceStates(compiled, assignment, open, (trial) => effectOf(totals, totalsOf(trial))),
+    choices: choiceStates(compiled, assignment, open, effectOf),
     figures: figuresOf(compiled, reading, totals?.weight ?? null),
     findings,
     price:
@@ -31,7 +31,7 @@ export function evaluate(context: EvaluationContext, build: Build): Evaluation {
         ? null
         : priceBuild(context.priceList, context.catalogue, knownBuild(compiled, assignment, build)),
     weight: totals?.weight ?? null,
-    shipsOn: totals?.shipsOn ?? null,
+    shipsOn: totals?.ships.date ?? null,
     minutes: totals?.minutes ?? {},
     leadDays: totals?.leadDays ?? 0,
     unanswered,
@@ -58,47 +58,25 @@ function unansweredChoices(compiled: CompiledCatalogue, assignment: Assignment):
   });
 }
 
-function effectOf(now: Totals | null, then: Totals | null): OptionEffect {
-  if (now === null || then === null) return { priceCents: null, weight: null, days: null };
-  return {
-    priceCents: then.priceCents - now.priceCents,
-    weight: then.weight - now.weight,
-    days: daysBetween(now.shipsOn, then.shipsOn),
-  };
-}
-
 function choiceStates(
   compiled: CompiledCatalogue,
   assignment: Assignment,
   open: Uint8Array,
-  effect: (trial: Assignment) => OptionEffect,
+  effectOf: (choice: number, at: number) => OptionEffect,
 ): ChoiceState[] {
-  const family = compiled.families[assignment[compiled.familyChoice] ?? -1];
+  const family = assignment[compiled.familyChoice] ?? -1;
   return compiled.choices.map((choice, index) => {
-    const trial = assignment.slice();
-    const options = choice.options.flatMap((option, at) => {
-      if (family !== undefined && option.families?.includes(family.id) === false) return [];
-      trial[index] = at;
-      const counted = index === compiled.familyChoice ? existingOnly(compiled, trial) : trial;
-      return [
-        {
-          option: option.id,
-          chosen: assignment[index] === at,
-          open: open[(compiled.offsets[index] ?? 0) + at] === 1,
-          effect: effect(counted),
-        },
-      ];
+    const from = compiled.offsets[index] ?? 0;
+    const options: ChoiceState["options"] = [];
+    choice.options.forEach((option, at) => {
+      if (!compiled.exists(family, index, at)) return;
+      options.push({
+        option: option.id,
+        chosen: assignment[index] === at,
+        open: open[from + at] === 1,
+        effect: effectOf(index, at),
+      });
     });
     return { choice: choice.id, options };
-  });
-}
-
-/** The assignment without the answers that its family does not have. */
-export function existingOnly(compiled: CompiledCatalogue, assignment: Assignment): Assignment {
-  const family = compiled.families[assignment[compiled.familyChoice] ?? -1];
-  if (family === undefined) return assignment;
-  return assignment.map((at, index) => {
-    const option = compiled.choices[index]?.options[at];
-    return option?.families?.includes(family.id) === false ? -1 : at;
   });
 }

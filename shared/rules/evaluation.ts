@@ -1,5 +1,6 @@
 import type { Build } from "../catalogue/build.ts";
 import type { Catalogue, Severity, WorkCentre } from "../catalogue/catalogue.ts";
+import type { NearestApproach } from "../geometry/rod-clearance.ts";
 import type { PriceList } from "../pricing/price-list.ts";
 import type { PriceLine } from "../pricing/price-build.ts";
 import type { Load } from "../scheduling/estimate.ts";
@@ -56,7 +57,8 @@ export interface Mend {
   days: number | null;
 }
 
-export type FigureUnit = "in" | "cu in" | "cc" | "L" | "m/s" | "ft/min" | "hp" | "lb" | "ratio" | "degrees";
+export type FigureUnit =
+  "in" | "cu in" | "cc" | "L" | "m/s" | "ft/min" | "hp" | "lb" | "ratio" | "degrees" | "g";
 
 export interface Figure {
   id: string;
@@ -70,6 +72,8 @@ export interface Figure {
   formula: string;
   /** The limit it is held against by a rule of the catalogue, if any. */
   limit: { is: ">=" | "<="; value: number; rule: string } | null;
+  /** Where a nearest approach is: crank angle, bank, rod and place, for the drawing. Absent where the figure has no place. */
+  at?: Omit<NearestApproach, "value">;
 }
 
 export interface Finding {

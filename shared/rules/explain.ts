@@ -1,5 +1,6 @@
 import type { Build } from "../catalogue/build.ts";
-import { compileCatalogue, type Assignment, type CompiledCatalogue } from "./compile.ts";
+import { compileCatalogue, type CompiledCatalogue } from "./compile.ts";
+import type { Assignment } from "./problem.ts";
 import { minimalConflict, type Conflict } from "./conflict.ts";
 import type { EvaluationContext, Reason } from "./evaluation.ts";
 

@@ -1,11 +1,13 @@
 import type { Build } from "../catalogue/build.ts";
-import { compileCatalogue, type Assignment, type CompiledCatalogue } from "./compile.ts";
-import { minimalConflict } from "./conflict.ts";
+import { compileCatalogue, type CompiledCatalogue } from "./compile.ts";
 import type { EvaluationContext, Mend } from "./evaluation.ts";
-import { existingOnly } from "./evaluate.ts";
 import { withWanted, type Wanted } from "./explain.ts";
-import { findInAnyFamily } from "./open-options.ts";
-import { createTotals, daysBetween, type Totals } from "./totals.ts";
+import { cheapestFilling, type Candidate, type Filling } from "./filling.ts";
+import { isPossible } from "./open-options.ts";
+import type { Assignment } from "./problem.ts";
+import { leastRelaxations } from "./relaxation.ts";
+import type { Numbers } from "./rule-table.ts";
+import { existingOnly, totalsOf, type Totals } from "./totals.ts";
 
 /**
  * The cheapest mend that lets a closed option in: fewest answers changed or dropped, then least net price increase, then days,
@@ -18,20 +20,33 @@ export function mend(context: EvaluationContext, build: Build, wanted: Wanted): 
   return cheapestMend(context, compiled, { build, target: assignment, held: choice, numbers: build.numbers });
 }
 
+/**
+ * The cheapest mend of a whole build that no longer stands, such as one saved under an older catalogue: as `mend`, with every
+ * answer dropped that the catalogue does not have any more. Null where there is none, or nothing to mend.
+ */
+export function repair(context: EvaluationContext, build: Build): Mend | null {
+  const compiled = compileCatalogue(context.catalogue);
+  const target = compiled.known(build.answers);
+  const gone = Object.entries(build.answers).flatMap(([choice, from]) => {
+    const index = compiled.choiceIndex.get(choice);
+    return index !== undefined && target[index] === -1 ? [{ choice, from, to: null }] : [];
+  });
+  if (gone.some(({ choice }) => build.mine.includes(choice))) return null;
+  if (isPossible(compiled, target, build.numbers)) {
+    const unchanged = (target[compiled.familyChoice] ?? -1) < 0 ? null : 0;
+    return gone.length === 0 ? null : { changes: gone, priceCents: unchanged, days: unchanged };
+  }
+  const found = cheapestMend(context, compiled, { build, target, held: null, numbers: build.numbers });
+  return found === null ? null : { ...found, changes: [...gone, ...found.changes] };
+}
+
 export interface MendQuestion {
   build: Build;
   /** The answers with the wanted option in place. */
   target: Assignment;
   /** The wanted option's choice, if there is one. */
   held: number | null;
-  numbers: Readonly<Record<string, string>>;
-}
-
-interface Candidate {
-  assignment: Assignment;
-  /** Indices of the changed or dropped choices, in catalogue order. */
-  changed: number[];
-  totals: Totals | null;
+  numbers: Numbers;
 }
 
 export function cheapestMend(
@@ -40,20 +55,21 @@ export function cheapestMend(
   question: MendQuestion,
 ): Mend | null {
   const { target, numbers, build } = question;
-  if (findInAnyFamily(compiled, target, numbers) !== null) return null;
+  if (isPossible(compiled, target, numbers)) return null;
   const mine = new Set(build.mine.flatMap((id) => compiled.choiceIndex.get(id) ?? []));
   if (question.held !== null) mine.add(question.held);
-  const totalsOf = createTotals(context, compiled, numbers);
-  const now = totalsOf(compiled.assignment(build.answers));
   let best: Candidate | null = null;
   for (const start of starts(compiled, target, mine)) {
-    const dropped = differing(target, start);
-    const most = best === null ? Number.POSITIVE_INFINITY : best.changed.length - dropped.length;
+    const dropped = differing(target, start).length;
+    const most = best === null ? Number.POSITIVE_INFINITY : best.changed.length - dropped;
     for (const freed of leastRelaxations(compiled, start, numbers, { fixed: mine, most })) {
-      const floor = best === null || best.changed.length > dropped.length + freed.length ? null : best;
-      best = cheapestFilling({ compiled, target, start, freed, numbers, totalsOf, now }, floor);
+      const floor: Candidate | null =
+        best === null || best.changed.length > dropped + freed.length ? null : best;
+      const filling: Filling = { context, compiled, target, start, freed, numbers };
+      best = cheapestFilling(filling, floor);
     }
   }
+  const now = totalsOf(context, compiled, compiled.assignment(build.answers), numbers);
   return best === null ? null : describe(compiled, target, best, now);
 }
 
@@ -82,104 +98,6 @@ function differing(before: Assignment, after: Assignment): number[] {
   return [...before.keys()].filter((index) => before[index] !== after[index]);
 }
 
-/**
- * All smallest sets of answers (of at most `most`) that leave a valid build when they are freed: every minimal conflict must be
- * hit, so the sets grow by one element of a conflict at a time, breadth first.
- */
-function leastRelaxations(
-  compiled: CompiledCatalogue,
-  start: Assignment,
-  numbers: Readonly<Record<string, string>>,
-  limits: { fixed: ReadonlySet<number>; most: number },
-): number[][] {
-  const { fixed, most } = limits;
-  const held = new Set([...fixed, compiled.familyChoice]);
-  let layer: number[][] = [[]];
-  for (let size = 0; size <= most && layer.length > 0; size += 1) {
-    const found: number[][] = [];
-    const next = new Map<string, number[]>();
-    for (const freed of layer) {
-      const given = without(start, freed);
-      const conflict = minimalConflict({ compiled, given, numbers, held });
-      if (conflict === null) {
-        found.push(freed);
-        continue;
-      }
-      for (const choice of conflict.choices) {
-        const grown = [...freed, choice].sort((a, b) => a - b);
-        next.set(grown.join(" "), grown);
-      }
-    }
-    if (found.length > 0) return found;
-    layer = [...next.values()];
-  }
-  return [];
-}
-
-function without(assignment: Assignment, freed: readonly number[]): Assignment {
-  const given = assignment.slice();
-  for (const choice of freed) given[choice] = -1;
-  return given;
-}
-
-interface Filling {
-  compiled: CompiledCatalogue;
-  target: Assignment;
-  start: Assignment;
-  freed: readonly number[];
-  numbers: Readonly<Record<string, string>>;
-  totalsOf: (assignment: Assignment) => Totals | null;
-  now: Totals | null;
-}
-
-/** The cheapest way to answer the freed choices anew, or the best known if that is cheaper. */
-function cheapestFilling(filling: Filling, known: Candidate | null): Candidate | null {
-  const { compiled, target, start, freed, numbers, totalsOf } = filling;
-  let best = known;
-  const given = without(start, freed);
-  const fill = (at: number): void => {
-    const choice = freed[at];
-    if (choice === undefined) {
-      const candidate = {
-        assignment: given.slice(),
-        changed: differing(target, given),
-        totals: totalsOf(given),
-      };
-      if (best !== null && compareCandidates(candidate, best) >= 0) return;
-      if (findInAnyFamily(compiled, given, numbers) !== null) best = candidate;
-      return;
-    }
-    const options = compiled.choices[choice]?.options ?? [];
-    for (const option of options.keys()) {
-      if (option === target[choice]) continue;
-      given[choice] = option;
-      if (at + 1 === freed.length || findInAnyFamily(compiled, given, numbers) !== null) fill(at + 1);
-    }
-    given[choice] = -1;
-  };
-  fill(0);
-  return best;
-}
-
-/** Negative where a is the better mend: price, then days, then catalogue order; both change the same number of answers. */
-function compareCandidates(a: Candidate, b: Candidate): number {
-  const count = a.changed.length - b.changed.length;
-  if (count !== 0) return count;
-  if (a.totals !== null && b.totals !== null) {
-    const price = a.totals.priceCents - b.totals.priceCents;
-    if (price !== 0) return price;
-    const days = daysBetween(b.totals.shipsOn, a.totals.shipsOn);
-    if (days !== 0) return days;
-  }
-  for (const [at, choice] of a.changed.entries()) {
-    const other = b.changed[at] ?? -1;
-    if (choice !== other) return choice - other;
-    const option = (a.assignment[choice] ?? -1) - (b.assignment[choice] ?? -1);
-    if (option !== 0) return option;
-  }
-  return 0;
-}
-
 function describe(
   compiled: CompiledCatalogue,
   target: Assignment,
@@ -195,6 +113,6 @@ function describe(
       to: idOf(choice, best.assignment[choice] ?? -1),
     })),
     priceCents: now === null || best.totals === null ? null : best.totals.priceCents - now.priceCents,
-    days: now === null || best.totals === null ? null : daysBetween(now.shipsOn, best.totals.shipsOn),
+    days: now === null || best.totals === null ? null : best.totals.ships.day - now.ships.day,
   };
 }

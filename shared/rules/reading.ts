@@ -47,9 +47,17 @@ export function numberProblem(field: NumberField, text: string): string | null {
   return null;
 }
 
-export function createReading(source: ReadingSource): Reading {
+/** A reading whose answers may be changed under it, once it forgets the figures it knows. */
+export interface LiveReading extends Reading {
+  forget(): void;
+}
+
+export function createReading(source: ReadingSource): LiveReading {
   const known = new Map<string, number | null>();
-  const reading: Reading = {
+  const reading: LiveReading = {
+    forget: () => {
+      known.clear();
+    },
     family: source.family,
     chosen: (choice) => source.optionOf(choice)?.id ?? null,
     value(name) {

@@ -1,85 +1,170 @@
-import { workCentreSchema, type Family, type Option, type WorkCentre } from "../catalogue/catalogue.ts";
+import { workCentreSchema, type Family, type Option } from "../catalogue/catalogue.ts";
 import { blockWeight } from "../geometry/weight.ts";
-import { baseAmount, optionAmount } from "../pricing/price-build.ts";
-import { parseDay } from "../scheduling/calendar.ts";
-import { estimateShipDate } from "../scheduling/estimate.ts";
-import type { Assignment, CompiledCatalogue } from "./compile.ts";
-import type { EvaluationContext } from "./evaluation.ts";
-import type { Reading } from "./reading.ts";
+import { amountsOf } from "./amounts.ts";
+import type { CompiledCatalogue } from "./compile.ts";
+import type { EvaluationContext, OptionEffect } from "./evaluation.ts";
+import type { Assignment } from "./problem.ts";
+import type { Numbers } from "./rule-table.ts";
+import { shipDateOf, type Minutes, type ShipDate } from "./ship-dates.ts";
 
 /** What a partial build with a family comes to. */
 export interface Totals {
   priceCents: number;
   weight: number;
-  minutes: Partial<Record<WorkCentre, number>>;
+  minutes: Minutes;
   leadDays: number;
-  shipsOn: string;
+  ships: ShipDate;
 }
 
-/** Totals of partial builds; null without a family. One instance serves one evaluation and keeps the dates it found. */
-export function createTotals(
+/** Totals of a partial build; null without a family. */
+export function totalsOf(
   context: EvaluationContext,
   compiled: CompiledCatalogue,
-  numbers: Readonly<Record<string, string>>,
-): (assignment: Assignment) => Totals | null {
-  const dates = new Map<string, string>();
-  return (assignment) => {
-    const familyIndex = assignment[compiled.familyChoice] ?? -1;
-    const family = compiled.families[familyIndex];
-    if (family === undefined) return null;
-    const chosen = chosenOptions(compiled, assignment);
-    let priceCents = baseAmount(context.priceList, family.id);
-    let leadDays = family.leadDays;
-    const minutes: Partial<Record<WorkCentre, number>> = { ...family.minutes };
-    for (const [choice, option] of chosen) {
-      priceCents += optionAmount(context.priceList, family.id, choice, option.id);
-      leadDays = Math.max(leadDays, option.leadDays);
-      addMinutes(minutes, option.minutes);
-    }
-    const key = `${leadDays} ${workCentreSchema.options.map((centre) => minutes[centre] ?? 0).join(" ")}`;
-    const shipsOn =
-      dates.get(key) ?? estimateShipDate({ minutes, load: context.load, today: context.today, leadDays });
-    dates.set(key, shipsOn);
-    const reading = compiled.reading(familyIndex, (choice) => assignment[choice] ?? -1, numbers);
-    const weight = weightOf(
-      family,
-      reading,
-      chosen.map(([, option]) => option.weight),
-    );
-    return { priceCents, weight, minutes, leadDays, shipsOn };
+  assignment: Assignment,
+  numbers: Numbers,
+): Totals | null {
+  const familyIndex = assignment[compiled.familyChoice] ?? -1;
+  const family = compiled.families[familyIndex];
+  if (family === undefined) return null;
+  const amounts = amountsOf(compiled, context.priceList, familyIndex);
+  let priceCents = amounts.base;
+  let optionWeight = 0;
+  let leadDays = family.leadDays;
+  const minutes: Minutes = { ...family.minutes };
+  for (let choice = 0; choice < assignment.length; choice += 1) {
+    const at = assignment[choice] ?? -1;
+    const option = compiled.choices[choice]?.options[at];
+    if (option === undefined || choice === compiled.familyChoice) continue;
+    priceCents += amounts.options[(compiled.offsets[choice] ?? 0) + at] ?? 0;
+    optionWeight += option.weight;
+    leadDays = Math.max(leadDays, option.leadDays);
+    addMinutes(minutes, option, 1);
+  }
+  return {
+    priceCents,
+    weight: optionWeight + ironWeight(compiled, family, assignment, numbers),
+    minutes,
+    leadDays,
+    ships: shipDateOf(context.load, context.today, minutes, leadDays),
   };
 }
 
-/** Calendar days from one ISO date to another, signed. */
-export function daysBetween(from: string, to: string): number {
-  return parseDay(to) - parseDay(from);
+/** Effects of other options against a build as it stands; one instance serves one build. */
+export function createEffects(
+  context: EvaluationContext,
+  compiled: CompiledCatalogue,
+  assignment: Assignment,
+  numbers: Numbers,
+): { totals: Totals | null; effectOf: (choice: number, at: number) => OptionEffect } {
+  const totals = totalsOf(context, compiled, assignment, numbers);
+  const familyIndex = assignment[compiled.familyChoice] ?? -1;
+  const family = compiled.families[familyIndex];
+  if (totals === null || family === undefined) {
+    return { totals, effectOf: () => ({ priceCents: null, weight: null, days: null }) };
+  }
+  const { options: amounts } = amountsOf(compiled, context.priceList, familyIndex);
+  const iron = ironWeight(compiled, family, assignment, numbers);
+  const leadWithout = leadsWithout(compiled, family, assignment);
+  const trial = assignment.slice();
+
+  const daysOf = (choice: number, option: Option, before: Option | undefined): number => {
+    const leadDays = Math.max(leadWithout(choice), option.leadDays);
+    const same = workCentreSchema.options.every(
+      (centre) => (option.minutes[centre] ?? 0) === (before?.minutes[centre] ?? 0),
+    );
+    if (same && leadDays === totals.leadDays) return 0;
+    const minutes = { ...totals.minutes };
+    addMinutes(minutes, option, 1);
+    if (before !== undefined) addMinutes(minutes, before, -1);
+    return shipDateOf(context.load, context.today, minutes, leadDays).day - totals.ships.day;
+  };
+
+  const effectOf = (choice: number, at: number): OptionEffect => {
+    const answer = assignment[choice] ?? -1;
+    if (at === answer) return { priceCents: 0, weight: 0, days: 0 };
+    trial[choice] = at;
+    try {
+      if (choice === compiled.familyChoice) {
+        const then = totalsOf(context, compiled, existingOnly(compiled, trial), numbers);
+        return then === null ? { priceCents: null, weight: null, days: null } : differenceOf(totals, then);
+      }
+      const { options = [] } = compiled.choices[choice] ?? {};
+      const option = options[at];
+      const before = options[answer];
+      const from = compiled.offsets[choice] ?? 0;
+      const lighter =
+        compiled.borings[choice] === 1 ? ironWeight(compiled, family, trial, numbers) - iron : 0;
+      return {
+        priceCents: (amounts[from + at] ?? 0) - (answer < 0 ? 0 : (amounts[from + answer] ?? 0)),
+        weight: (option?.weight ?? 0) - (before?.weight ?? 0) + lighter,
+        days: option === undefined ? 0 : daysOf(choice, option, before),
+      };
+    } finally {
+      trial[choice] = answer;
+    }
+  };
+  return { totals, effectOf };
 }
 
-function chosenOptions(compiled: CompiledCatalogue, assignment: Assignment): [string, Option][] {
-  return compiled.choices.flatMap((choice, index) => {
-    const option = choice.options[assignment[index] ?? -1];
-    return option === undefined || index === compiled.familyChoice
-      ? []
-      : [[choice.id, option] as [string, Option]];
+function differenceOf(now: Totals, then: Totals): OptionEffect {
+  return {
+    priceCents: then.priceCents - now.priceCents,
+    weight: then.weight - now.weight,
+    days: then.ships.day - now.ships.day,
+  };
+}
+
+/** The assignment without the answers that its family does not have. */
+export function existingOnly(compiled: CompiledCatalogue, assignment: Assignment): Assignment {
+  const family = compiled.families[assignment[compiled.familyChoice] ?? -1];
+  if (family === undefined) return assignment;
+  return assignment.map((at, index) => {
+    const option = compiled.choices[index]?.options[at];
+    return option?.families?.includes(family.id) === false ? -1 : at;
   });
 }
 
-function addMinutes(
-  sum: Partial<Record<WorkCentre, number>>,
-  more: Partial<Record<WorkCentre, number>>,
-): void {
+/** The longest lead of the family and of all answers but one choice's. */
+function leadsWithout(
+  compiled: CompiledCatalogue,
+  family: Family,
+  assignment: Assignment,
+): (choice: number) => number {
+  let longest = family.leadDays;
+  let holder = -1;
+  let second = family.leadDays;
+  for (let choice = 0; choice < assignment.length; choice += 1) {
+    const option = compiled.choices[choice]?.options[assignment[choice] ?? -1];
+    if (option === undefined || choice === compiled.familyChoice) continue;
+    if (option.leadDays > longest) {
+      second = longest;
+      longest = option.leadDays;
+      holder = choice;
+    } else second = Math.max(second, option.leadDays);
+  }
+  return (choice) => (choice === holder ? second : longest);
+}
+
+function addMinutes(sum: Minutes, { minutes }: Option, times: 1 | -1): void {
   for (const centre of workCentreSchema.options) {
-    const minutes = more[centre];
-    if (minutes !== undefined) sum[centre] = (sum[centre] ?? 0) + minutes;
+    const own = minutes[centre];
+    if (own !== undefined) sum[centre] = (sum[centre] ?? 0) + times * own;
   }
 }
 
 /**
- * Weight of the bare block, lb. The bore as delivered counts, the finish bore while the finish is not chosen, the base bore
+ * Weight of the family's iron, lb. The bore as delivered counts, the finish bore while the finish is not chosen, the base bore
  * while no bore is; the family's lowest deck while none is chosen.
  */
-function weightOf(family: Family, reading: Reading, optionWeights: readonly number[]): number {
+function ironWeight(
+  compiled: CompiledCatalogue,
+  family: Family,
+  assignment: Assignment,
+  numbers: Numbers,
+): number {
   const { baseBore, barrelBottom, baseDeckHeight, cylinders } = family.values;
+  const familyIndex = assignment[compiled.familyChoice] ?? -1;
+  const reading = compiled.reading(familyIndex, (choice) => assignment[choice] ?? -1, numbers);
   const deckHeight = reading.value("deckHeight") ?? baseDeckHeight;
   if (
     baseBore === undefined ||
@@ -87,14 +172,13 @@ function weightOf(family: Family, reading: Reading, optionWeights: readonly numb
     deckHeight === undefined ||
     cylinders === undefined
   ) {
-    return family.weight + optionWeights.reduce((sum, weight) => sum + weight, 0);
+    return family.weight;
   }
-  const bored = reading.figure("deliveredBore") ?? reading.value("bore") ?? baseBore;
   return blockWeight({
     familyWeight: family.weight,
-    optionWeights,
+    optionWeights: [],
     baseBore,
-    deliveredBore: bored,
+    deliveredBore: reading.figure("deliveredBore") ?? reading.value("bore") ?? baseBore,
     barrelLength: deckHeight - barrelBottom,
     cylinders,
   });

@@ -22,6 +22,11 @@ function judgeTable(choices: readonly string[], rows: readonly string[][][], rea
   return chosen.includes(null) ? "undecided" : "kept";
 }
 
+/** Whether the rule's own condition is not known to apply, so that nothing is there to be confirmed. */
+export function isIdle(rule: Rule, reading: Reading): boolean {
+  return rule.kind === "expression" && rule.when !== undefined && holds(rule.when, reading) !== true;
+}
+
 /** Names of what a rule reads. */
 export interface RuleReads {
   choices: Set<string>;

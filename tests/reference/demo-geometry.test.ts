@@ -2,7 +2,8 @@ import { describe, expect, test } from "vitest";
 import { demoCatalogue } from "#server/demo/catalogue/catalogue.ts";
 import * as dimensions from "#shared/geometry/dimensions.ts";
 import { displacement } from "#shared/geometry/displacement.ts";
-import { outlineReach, rodToCase } from "#shared/geometry/rod-outline.ts";
+import { rodToBarrel, rodToCam } from "#shared/geometry/rod-clearance.ts";
+import { measureOutline, rodToCase } from "#shared/geometry/rod-outline.ts";
 import { blockWeight } from "#shared/geometry/weight.ts";
 
 /**
@@ -29,6 +30,9 @@ const gneiss = {
   swings: [4.075, 4.205, 4.34],
 };
 
+/** Notch of the stroke clearance: as cast, relieved, deep relief. */
+const notches = [0, 0.11, 0.19];
+
 interface Row {
   name: string;
   family: typeof marl;
@@ -38,6 +42,9 @@ interface Row {
   wall: number;
   web: number;
   case: number[];
+  /** Lobe radius, cam height, and the distance. */
+  cam: [lobeRadius: number, camHeight: number, distance: number];
+  rodToBarrel: number[];
   skirt: number;
   boss: number;
 }
@@ -52,6 +59,8 @@ const rows: Row[] = [
     wall: 0.2775,
     web: 0.4,
     case: [0.2, 0.33],
+    cam: [0.9, 4.52, 0.5025],
+    rodToBarrel: [0.226, 0.336],
     skirt: 0.365,
     boss: 0.31,
   },
@@ -64,6 +73,8 @@ const rows: Row[] = [
     wall: 0.215,
     web: 0.275,
     case: [0.065, 0.195],
+    cam: [0.9, 4.52, 0.3658],
+    rodToBarrel: [0.112, 0.222],
     skirt: 0.2,
     boss: 0.325,
   },
@@ -76,6 +87,8 @@ const rows: Row[] = [
     wall: 0.2,
     web: 0.245,
     case: [0.065, 0.195],
+    cam: [0.9, 4.52, 0.1572],
+    rodToBarrel: [0.118, 0.228],
     skirt: 0.2,
     boss: 0.325,
   },
@@ -88,6 +101,8 @@ const rows: Row[] = [
     wall: 0.215,
     web: 0.275,
     case: [0.002, 0.132],
+    cam: [0.9, 4.52, 0.3007],
+    rodToBarrel: [0.044, 0.154],
     skirt: 0.263,
     boss: 0.263,
   },
@@ -100,6 +115,8 @@ const rows: Row[] = [
     wall: 0.215,
     web: 0.275,
     case: [-0.102, 0.028],
+    cam: [0.9, 4.52, 0.2498],
+    rodToBarrel: [-0.037, 0.073],
     skirt: 0.2,
     boss: 0.325,
   },
@@ -112,6 +129,8 @@ const rows: Row[] = [
     wall: 0.2475,
     web: 0.215,
     case: [-0.165, -0.035, 0.095],
+    cam: [1.05, 4.92, 0.4347],
+    rodToBarrel: [-0.091, 0.019, 0.099],
     skirt: 0.138,
     boss: 0.338,
   },
@@ -124,6 +143,8 @@ const rows: Row[] = [
     wall: 0.3,
     web: 0.34,
     case: [0.07, 0.2, 0.335],
+    cam: [0.95, 5.15, 0.6198],
+    rodToBarrel: [0.101, 0.211, 0.291],
     skirt: 0.44,
     boss: 0.21,
   },
@@ -152,6 +173,21 @@ describe("figures of the demo's table", () => {
       const clearance = rodToCase({ caseSwingRadius, stroke, outline: outlineOf(row.outline) });
       expect(Math.abs(clearance - (row.case[at] ?? Number.NaN))).toBeLessThanOrEqual(0.00051);
     });
+    const rods = { stroke, rodLength, bankAngle: Math.PI / 4, outline: outlineOf(row.outline) };
+    const [lobeRadius, camHeight, distance] = row.cam;
+    expect(rodToCam({ ...rods, lobeRadius, camHeight }).value).toBe(distance);
+    row.rodToBarrel.forEach((expected, at) => {
+      const { value, rod } = rodToBarrel({
+        ...rods,
+        bore,
+        barrelBottom: family.bottom,
+        bankOffset: 0.92,
+        bigEndWidth: 0.94,
+        notch: notches[at] ?? Number.NaN,
+      });
+      expect(Math.abs(value - expected)).toBeLessThanOrEqual(0.00051);
+      expect(rod).toBe("other");
+    });
     const exposure = dimensions.skirtExposure({
       barrelBottom: family.bottom,
       rodLength,
@@ -176,6 +212,18 @@ describe("figures of the demo's table", () => {
     expect(
       dimensions.cylinderWall({ barrelOutsideDiameter: 4.615, finishBore: 4.155, coreShift: 0.03 }),
     ).toBe(0.2);
+  });
+});
+
+describe("rod to cam alone, of the demo's table", () => {
+  test.each([
+    ["steel", 6, 0.9, 0.2357],
+    ["shouldered", 6, 0.9, 0.0263],
+    ["shouldered", 5.85, 0.9, 0.0239],
+    ["shouldered", 5.85, 0.84, 0.0839],
+  ])("%s 4.000 stroke, %d rod, lobe %d under a cam at 4.520", (outline, rodLength, lobeRadius, distance) => {
+    const rods = { stroke: 4, rodLength, bankAngle: Math.PI / 4, outline: outlineOf(outline) };
+    expect(rodToCam({ ...rods, lobeRadius, camHeight: 4.52 }).value).toBe(distance);
   });
 });
 
@@ -211,7 +259,7 @@ describe("stack-up, bore and small dimensions", () => {
     expect(() => dimensions.deliveredBore({ finishBore: 4, stock: 4 })).toThrow("greater than the bore");
     expect(() => dimensions.lobeToJournal({ journalDiameter: 1.86801, lobeRadius: 0.9 })).toThrow("grid");
     expect(() =>
-      outlineReach([
+      measureOutline([
         [0, 0],
         [1, 1],
       ]),

@@ -36,6 +36,8 @@ const table: Record<string, readonly Identity[]> = {
   "GET /api/catalogue": everyone,
   "GET /api/catalogue/:version": everyone,
   "POST /api/builds": everyone,
+  "POST /api/builds/mend": everyone,
+  "POST /api/targets": everyone,
   "GET /api/cart": everyone,
   "POST /api/cart/lines": everyone,
   "PATCH /api/cart/lines/:id": everyone,

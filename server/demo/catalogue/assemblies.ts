@@ -1,4 +1,5 @@
 import type { ChoiceDocument, OptionDocument } from "./document.ts";
+import { ownNumberIds } from "./numbers.ts";
 
 interface Assembly {
   families: string[];
@@ -34,7 +35,7 @@ const assemblies: Assembly[] = [
     rodLength: 5.7,
     rodKind: "steel",
     compressionHeight: 1.425,
-    counterweightRadius: 3.25,
+    counterweightRadius: 3.15,
     lobeRadius: 0.9,
     deck: 9.025,
     say: "For pistons with the pin low and away from the rings; the skirt hangs further out of the barrel.",
@@ -111,7 +112,7 @@ const assemblies: Assembly[] = [
     rodLength: 5.85,
     rodKind: "steel",
     compressionHeight: 1.0875,
-    counterweightRadius: 3.2,
+    counterweightRadius: 3.15,
     lobeRadius: 0.9,
     deck: 9.025,
     say: "Same stroke with a fuller piston; the short rod loads the thrust wall and lets the skirt out.",
@@ -268,17 +269,73 @@ function assemblyOption(assembly: Assembly): OptionDocument {
   };
 }
 
+const ownKinds = [
+  {
+    id: "ownSteel",
+    name: "steel rods",
+    rodKind: "steel",
+    say: "Rods with plain bolt heads: their outline is checked against case, barrel and cam.",
+  },
+  {
+    id: "ownShouldered",
+    name: "shouldered steel rods",
+    rodKind: "shouldered",
+    say: "Rods whose bolt shoulders stand out: they come nearest the cam.",
+  },
+  {
+    id: "ownAluminium",
+    name: "aluminium rods",
+    rodKind: "aluminium",
+    say: "The bulkiest outline, with the wider clearances that aluminium asks for.",
+  },
+] as const;
+
+const largeRods = "Rods of the 4.840 in spacing are five hundredths larger each way.";
+
+/**
+ * Own numbers, one option for each kind of rod: so the kind is known with the answer, no question about rods stands open beside
+ * a preset that has its own, and the numbers typed do not multiply the builds.
+ */
+const ownOptions: OptionDocument[] = [
+  ...ownKinds.flatMap(({ id, name, rodKind, say }): OptionDocument[] => [
+    {
+      id,
+      name: `Own numbers, ${name}`,
+      description: `${say} Type what you have measured; what you leave empty is to be confirmed.`,
+      families: spacing4400,
+      words: { rodKind, rodOutline: rodKind },
+      reads: ownNumberIds,
+    },
+    {
+      id: `${id}Large`,
+      name: `Own numbers, large ${name}`,
+      description: `${say} ${largeRods}`,
+      families: ["gneiss"],
+      words: { rodKind, rodOutline: `${rodKind}Large` },
+      reads: ownNumberIds,
+    },
+  ]),
+  {
+    id: "ownRodsNotKnown",
+    name: "Own numbers, rods not chosen yet",
+    description:
+      "Stroke, lengths and heights as you type them; whatever depends on the rod's outline is to be confirmed.",
+    reads: ownNumberIds,
+  },
+];
+
 export const rotatingAssembly: ChoiceDocument = {
   id: "rotatingAssembly",
   name: "Rotating assembly",
   question: "Which crank, rods and pistons go in?",
   help: {
     what: "The set you will fit; we do not sell it. Its sizes say what must clear.",
-    when: "Pick the nearest set, or leave it unknown: then nothing is checked against it.",
+    when: "Pick a set, type your own numbers, or leave it unknown: then nothing is checked against it.",
     cost: "Nothing by itself. A longer stroke or bulkier rods may ask for stroke clearance or a larger cam tunnel.",
   },
   options: [
     ...assemblies.map(assemblyOption),
+    ...ownOptions,
     {
       id: "notKnown",
       name: "Not known yet",

@@ -3,11 +3,13 @@ import { castingChoices } from "./choices-casting.ts";
 import { boreAndDeckChoices } from "./choices-bore-and-deck.ts";
 import { bottomEndChoices } from "./choices-bottom-end.ts";
 import { extraChoices } from "./choices-extras.ts";
+import { finishingChoices } from "./choices-finishing.ts";
 import { valveGearChoices } from "./choices-valve-gear.ts";
 import { families } from "./families.ts";
+import { numbers } from "./numbers.ts";
 import { outlines } from "./outlines.ts";
 import { rules } from "./rules.ts";
-import { numbers, steps } from "./steps.ts";
+import { steps } from "./steps.ts";
 
 /** Mean effective pressures, psi, from memory; nitrous is left out, for its range needs the shot. */
 const naturallyAspirated: Record<string, [low: number, high: number]> = {
@@ -35,6 +37,7 @@ export const demoCatalogue: Catalogue = catalogueSchema.parse({
     ...boreAndDeckChoices,
     ...bottomEndChoices,
     ...valveGearChoices,
+    ...finishingChoices,
     ...extraChoices,
   ],
   numbers,

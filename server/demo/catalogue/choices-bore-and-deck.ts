@@ -11,7 +11,7 @@ export const boreAndDeckChoices: ChoiceDocument[] = [
     help: {
       what: "How much stock stays in the bores for your own hone.",
       when: "Your machinist's hone and your pistons decide. Measure the pistons before any final size is cut.",
-      cost: "A finish hone with a torque plate takes the hone for most of an hour and a half.",
+      cost: "A finish hone takes most of an hour and a half; honing eight sizes to your pistons two hours.",
     },
     options: [
       {
@@ -37,6 +37,14 @@ export const boreAndDeckChoices: ChoiceDocument[] = [
         values: { stock: 0 },
         minutes: { thirdOperation: 20, finishHone: 85 },
         leadDays: 2,
+      },
+      {
+        id: "honedToMyPistons",
+        name: "Honed to my pistons",
+        description:
+          "Each cylinder to its own measured skirt and your clearance, under a torque plate. Send eight sizes first.",
+        minutes: { thirdOperation: 20, finishHone: 120, inspection: 10 },
+        leadDays: 4,
       },
     ],
   },

@@ -130,6 +130,33 @@ export const bottomEndChoices: ChoiceDocument[] = [
     ],
   },
   {
+    id: "dipstickSide",
+    name: "Dipstick",
+    question: "On which side is the dipstick?",
+    help: {
+      what: "The hole through the pan rail for the dipstick's tube.",
+      when: "Your pan, your exhaust and the steering beside the engine decide.",
+      cost: "Nothing. A hole that is not drilled can be drilled later, one that is cannot be taken back.",
+    },
+    options: [
+      {
+        id: "left",
+        name: "Left side",
+        description: "The driver's side of most cars. Check it against the pan.",
+      },
+      {
+        id: "right",
+        name: "Right side",
+        description: "Where the exhaust or a steering shaft takes the left.",
+      },
+      {
+        id: "undrilled",
+        name: "Not drilled",
+        description: "For a pan with a dipstick of its own, and for every dry sump.",
+      },
+    ],
+  },
+  {
     id: "strokeClearance",
     name: "Stroke clearance",
     question: "How far is the case relieved?",

@@ -1,30 +1,7 @@
 import type { ChoiceDocument } from "./document.ts";
 
-/** Plugs, dowels and reports. */
+/** Kits that travel in the crate. */
 export const extraChoices: ChoiceDocument[] = [
-  {
-    id: "corePlugs",
-    name: "Core plugs",
-    question: "How are the core holes closed?",
-    help: {
-      what: "Plugs in the holes where the sand of the water jacket came out.",
-      when: "Pressed for most; threaded where a plug must not come out.",
-      cost: "Threaded holes are tapped and their plugs cost more. Wear eye protection when fitting plugs.",
-    },
-    options: [
-      {
-        id: "pressed",
-        name: "Pressed",
-        description: "Cups driven in with sealer, by you, after cleaning. Cheap and quick to renew.",
-      },
-      {
-        id: "threaded",
-        name: "Threaded",
-        description: "Tapped holes with screwed plugs. Asked for by marine use; safe under pressure tests.",
-        minutes: { secondOperation: 28 },
-      },
-    ],
-  },
   {
     id: "dowelKit",
     name: "Dowel kit",
@@ -49,48 +26,72 @@ export const extraChoices: ChoiceDocument[] = [
     ],
   },
   {
-    id: "sonicReport",
-    name: "Sonic report",
-    question: "Measure the walls and report them?",
+    id: "plugKit",
+    name: "Plug kit",
+    question: "Add the plug kit?",
     help: {
-      what: "Ultrasonic wall readings of every cylinder: six heights, four sides.",
-      when: "Before boring on, and whenever the nominal wall is near its limit.",
-      cost: "Three quarters of an hour at inspection.",
+      what: "Core plugs of the kind chosen, and every gallery and drain plug of the block.",
+      when: "For a block that is built up new; not when the old plugs are good.",
+      cost: "A small charge. You fit them after the last wash, with eye protection on.",
     },
     options: [
       {
-        id: "noSonic",
-        name: "No report",
-        description: "The nominal wall holds with our core-shift allowance, but no reading is written down.",
+        id: "noPlugs",
+        name: "No plug kit",
+        description: "Plugs from your own shelf; the sheet in the crate lists the sizes.",
       },
       {
-        id: "sonic",
-        name: "With report",
-        description: "Every reading on a sheet with the block's serial number.",
-        minutes: { inspection: 45 },
+        id: "plugs",
+        name: "With plug kit",
+        description: "All plugs in one bag, counted, with the sealer they want.",
+        weight: 1,
       },
     ],
   },
   {
-    id: "hardnessReport",
-    name: "Hardness report",
-    question: "Test and report the iron's hardness?",
+    id: "headStudKit",
+    name: "Head stud kit",
+    question: "Add head studs?",
     help: {
-      what: "Brinell readings on both decks and a main web.",
-      when: "When a series or an engine builder asks for the iron's proof.",
-      cost: "A quarter of an hour and three small marks on faces that do not seal.",
+      what: "Studs, nuts and hardened washers for both heads, in the thread chosen.",
+      when: "Where heads come off often, or cylinder pressure is high.",
+      cost: "The price of the kit and its weight; the block itself stays the same.",
     },
     options: [
       {
-        id: "noHardness",
-        name: "No hardness test",
-        description: "The lot's foundry certificate stays on file with us.",
+        id: "noHeadStuds",
+        name: "No head studs",
+        description: "Bolts or studs of your own; every hole is blind and tapped alike.",
       },
       {
-        id: "hardness",
-        name: "Hardness tested",
-        description: "Readings of this very block, beside the heat number of its iron.",
-        minutes: { inspection: 15 },
+        id: "headStuds",
+        name: "With head studs",
+        description: "A full set with its maker's lubricant and torque sheet.",
+        weight: 9,
+      },
+    ],
+  },
+  {
+    id: "mainStudKit",
+    name: "Main stud kit",
+    question: "Add main studs?",
+    help: {
+      what: "Studs in place of the main caps' bolts; the mains are then bored with them in.",
+      when: "Where caps come off often. Decide before the mains are bored.",
+      cost: "The kit and a quarter of an hour of fitting.",
+    },
+    options: [
+      {
+        id: "noMainStuds",
+        name: "Main bolts",
+        description: "The bolts that come with the caps; mains are bored with them at their torque.",
+      },
+      {
+        id: "mainStuds",
+        name: "With main studs",
+        description: "Fitted for boring and left in their holes; splayed outer holes keep their bolts.",
+        weight: 2,
+        minutes: { capFitting: 15 },
       },
     ],
   },

@@ -128,6 +128,30 @@ export const valveGearChoices: ChoiceDocument[] = [
     ],
   },
   {
+    id: "camBearings",
+    name: "Cam bearings",
+    question: "Are the cam bearings fitted?",
+    help: {
+      what: "The shells or rolling bearings pressed into the tunnel, lined up and measured.",
+      when: "When the block comes honed and goes straight to assembly.",
+      cost: "The bearings and half an hour. They cannot stay in through a hone or a hot wash.",
+    },
+    options: [
+      {
+        id: "notFitted",
+        name: "Not fitted",
+        description: "The tunnel is bored and clean; you press the bearings in after your last wash.",
+      },
+      {
+        id: "fitted",
+        name: "Fitted",
+        description: "Pressed in with their oil holes lined up, and checked with a test bar.",
+        weight: 1,
+        minutes: { inspection: 30 },
+      },
+    ],
+  },
+  {
     id: "camHeight",
     name: "Cam height",
     question: "Where does the cam sit?",

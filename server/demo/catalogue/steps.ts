@@ -1,4 +1,5 @@
-import type { NumberDocument, StepDocument } from "./document.ts";
+import type { StepDocument } from "./document.ts";
+import { numbersByStep } from "./numbers.ts";
 
 /** The steps in trade order; the review is the form's own. */
 export const steps: StepDocument[] = [
@@ -8,7 +9,7 @@ export const steps: StepDocument[] = [
     intro:
       "What the engine is for, how it breathes, and the load you aim at. Power and speed may stay unknown.",
     choices: ["duty", "induction"],
-    numbers: ["powerAim", "rpmAim"],
+    numbers: numbersByStep.duty,
     caution:
       "Racing is dangerous. A modified engine may not be lawful on the road: local emissions and vehicle rules apply.",
   },
@@ -24,13 +25,14 @@ export const steps: StepDocument[] = [
     name: "Bore and deck",
     intro: "Cylinder size and finish, and the faces and threads for the heads.",
     choices: ["bore", "boreFinish", "deckFinish", "deckGroove", "headThread"],
+    numbers: numbersByStep.boreAndDeck,
     caution: "Wall thickness is nominal. Ask for a sonic check before boring on.",
   },
   {
     id: "bottom-end",
     name: "Bottom end",
     intro: "Mains, caps, rear seal and oiling.",
-    choices: ["mainSize", "capStyle", "rearSeal", "oiling"],
+    choices: ["mainSize", "capStyle", "rearSeal", "oiling", "dipstickSide"],
     caution: "Follow the fastener maker's procedure for lubricant, torque and sequence.",
   },
   {
@@ -38,6 +40,7 @@ export const steps: StepDocument[] = [
     name: "Rotating assembly",
     intro: "The crank, rods and pistons you will fit, and the room the case gives them.",
     choices: ["rotatingAssembly", "strokeClearance"],
+    numbers: numbersByStep.rotatingAssembly,
     caution:
       "Clearances here check the block against sizes entered. Every assembly must still be mocked up and measured.",
   },
@@ -45,40 +48,28 @@ export const steps: StepDocument[] = [
     id: "lifters-and-cam",
     name: "Lifters and cam",
     intro: "Lifters, cam tunnel and what drives the cam.",
-    choices: ["lifterStyle", "lifterBore", "camTunnel", "camHeight", "camDrive", "fuelPumpPad"],
+    choices: [
+      "lifterStyle",
+      "lifterBore",
+      "camTunnel",
+      "camBearings",
+      "camHeight",
+      "camDrive",
+      "fuelPumpPad",
+    ],
   },
   {
     id: "finishing",
     name: "Machining and finishing",
-    intro: "How the water jacket is closed and what is measured.",
-    choices: ["corePlugs", "sonicReport", "hardnessReport"],
+    intro: "How the water jacket is closed, how the block is mounted and coated, and what is measured.",
+    choices: ["corePlugs", "mounts", "coating", "sonicReport", "hardnessReport", "fullReport"],
     caution: "Wear eye protection for core plugs and grinding. Wash and oil the block before assembly.",
   },
   {
     id: "extras",
     name: "Extras",
     intro: "Parts that travel in the crate.",
-    choices: ["dowelKit"],
-  },
-];
-
-export const numbers: NumberDocument[] = [
-  {
-    id: "powerAim",
-    name: "Power aimed at",
-    unit: "hp",
-    step: 1,
-    least: 50,
-    most: 2500,
-    hint: "At the crank. Leave empty if you do not know. It is a load on the parts, never a promise.",
-  },
-  {
-    id: "rpmAim",
-    name: "Engine speed aimed at",
-    unit: "rpm",
-    step: 1,
-    least: 1000,
-    most: 12000,
-    hint: "The highest speed held under load. Leave empty if you do not know.",
+    choices: ["dowelKit", "plugKit", "headStudKit", "mainStudKit"],
+    caution: "Studs go in hand-tight. Use the kit maker's own lubricant and torque, never another's.",
   },
 ];

@@ -42,7 +42,8 @@ export async function requireOrderable(request: BuildRequest): Promise<Extract<C
 
 type Answers = { ok: true; answers: Record<string, string> } | { ok: false; sentence: string };
 
-async function answersOf(specCode: string): Promise<Answers> {
+/** Answers of a spec code, read by the catalogue that it was made with. */
+export async function answersOf(specCode: string): Promise<Answers> {
   const version = readSpecVersion(specCode);
   if (!version.ok) return version;
   const catalogue = await findCatalogue(version.version);

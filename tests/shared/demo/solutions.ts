@@ -67,28 +67,3 @@ export function breaks(
     ) === "broken"
   );
 }
-
-/**
- * Number of valid builds of a family with no number typed: choices that stop rules join are counted together by trying every
- * assignment of theirs, and the groups multiplied.
- */
-export function countValid(catalogue: Catalogue, family: number): bigint {
-  const { choices, stops, familyChoice } = compileCatalogue(catalogue);
-  const groups: number[][] = [...choices.keys()]
-    .filter((choice) => choice !== familyChoice)
-    .map((choice) => [choice]);
-  for (const { scope, numbers } of stops) {
-    if (scope.length < 2 || numbers.length > 0) continue;
-    const joined = groups.filter((group) => group.some((choice) => scope.includes(choice)));
-    for (const group of joined) groups.splice(groups.indexOf(group), 1);
-    groups.push(joined.flat());
-  }
-  return groups.reduce((product, group) => {
-    const rules = stops.filter(({ scope }) => scope.every((choice) => group.includes(choice)));
-    let valid = 0n;
-    for (const assignment of assignmentsOf(catalogue, family, group)) {
-      if (rules.every(({ rule }) => !breaks(catalogue, rule, assignment))) valid += 1n;
-    }
-    return product * valid;
-  }, 1n);
-}

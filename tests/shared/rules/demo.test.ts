@@ -7,7 +7,7 @@ import { compileCatalogue } from "#shared/rules/compile.ts";
 import { evaluate } from "#shared/rules/evaluate.ts";
 import { explain } from "#shared/rules/explain.ts";
 import { mend } from "#shared/rules/mend.ts";
-import { openOptions } from "#shared/rules/open-options.ts";
+import { openFlags } from "#shared/rules/open-options.ts";
 import { buildOf, demoContext, marl400 } from "../demo/context.ts";
 import { assignmentsOf, breaks, demoWith } from "../demo/solutions.ts";
 
@@ -187,7 +187,7 @@ describe("parts of the demo catalogue against every assignment of theirs", { tim
         const given = new Int16Array(choices.length).fill(-1);
         for (const choice of choices.keys())
           if (((mask >> choice) & 1) === 1) given[choice] = start?.[choice] ?? -1;
-        const open = openOptions(compiled, given, typed);
+        const open = openFlags(compiled, given, typed);
         for (const choice of choices.keys()) {
           const expected = new Set(
             valid

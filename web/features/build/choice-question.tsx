@@ -7,8 +7,9 @@ import { ClosedReason, MendButton } from "./closed-option.tsx";
 import { optionEffects } from "./option-effects.ts";
 import { SizeChart } from "./size-chart.tsx";
 
-/** Above so many options a choice is shown as a chart of sizes. */
+/** Above so many sizes, options that are named by nothing else, a choice is shown as a chart. */
 const mostRows = 24;
+const isSize = (name: string): boolean => /^\d+\.\d+ in$/.test(name);
 
 interface ChoiceQuestionProps {
   choice: Choice;
@@ -18,7 +19,8 @@ interface ChoiceQuestionProps {
 /** One choice of a step: every option with its effect, closed ones with their reason and mend. */
 export function ChoiceQuestion({ choice, state }: ChoiceQuestionProps) {
   const { current, choose } = useBuildDesk();
-  if (state.options.length > mostRows) return <SizeChart choice={choice} state={state} />;
+  if (state.options.length > mostRows && choice.options.every(({ name }) => isSize(name)))
+    return <SizeChart choice={choice} state={state} />;
   const chosen = state.options.find((option) => option.chosen)?.option ?? null;
   const rows = state.options.map((option): OptionRow => {
     const described = choice.options.find(({ id }) => id === option.option);

@@ -1,3 +1,4 @@
+import { isRead } from "#shared/catalogue/number-fields.ts";
 import { TextLink } from "#web/components/text-link.tsx";
 import { stepPath } from "./build-address.ts";
 import { useBuildDesk } from "./build-desk.tsx";
@@ -35,7 +36,7 @@ export function ChosenAnswers() {
                 );
               })}
               {catalogue.numbers
-                .filter(({ id }) => step.numbers.includes(id))
+                .filter((field) => step.numbers.includes(field.id) && isRead(catalogue, field, build.answers))
                 .map(({ id, name, unit }) => (
                   <Answer key={id} name={name} missing="not known yet">
                     {build.numbers[id] === undefined ? null : `${build.numbers[id]} ${unit}`}

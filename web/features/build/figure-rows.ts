@@ -70,6 +70,7 @@ function amount({ unit: own, places }: Figure, value: number, unit: LengthUnit):
     case "ft/min":
     case "hp":
     case "lb":
+    case "g":
       return `${fixed(value, places)} ${own}`;
   }
 }

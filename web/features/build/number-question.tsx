@@ -37,7 +37,7 @@ export function NumberQuestion({ field }: { field: Field }) {
   /** Whether what is typed stands in the build now. */
   const settle = (): boolean => {
     if (draft === null) return refused === null;
-    const text = draft.replaceAll(/[\s,_]/g, "");
+    const text = draft.replaceAll(/[\s,_]/g, "").replace("−", "-");
     if (text === known) {
       setDraft(null);
       setRefused(null);
@@ -69,7 +69,7 @@ export function NumberQuestion({ field }: { field: Field }) {
         optional
         unit={field.unit}
         unitName={unitNames[field.unit]}
-        inputMode={Number.isInteger(field.step) ? "numeric" : "decimal"}
+        inputMode={keyboardFor(field)}
         value={draft ?? known}
         onChange={(event) => {
           setDraft(event.target.value);
@@ -91,16 +91,20 @@ export function NumberQuestion({ field }: { field: Field }) {
           />
         </div>
       )}
-      {standing === null && known === "" && draft === null && (
-        <p className="mt-1 text-sm text-iron">Not known yet. What depends on it is marked to be confirmed.</p>
-      )}
     </div>
   );
 }
 
-/** "0450" and "450." as "450": plain decimal text as an address carries it. */
+/** A telephone's number pads have no minus sign. */
+function keyboardFor({ least, step }: Field): "text" | "numeric" | "decimal" {
+  if (least < 0) return "text";
+  return Number.isInteger(step) ? "numeric" : "decimal";
+}
+
+/** "0450" and "450." as "450", ".5" as "0.5": plain decimal text as an address carries it. */
 function plain(text: string): string {
   const [whole = "", fraction = ""] = text.replace(/^\+/, "").split(".");
-  const digits = whole.replace(/^(-?)0+(?=\d)/, "$1");
-  return fraction === "" ? digits : `${digits === "" ? "0" : digits}.${fraction}`;
+  const digits = whole.replace(/^(-?)0+(?=\d)/, "$1").replace(/^-?$/, "$&0");
+  const places = fraction.replace(/^(\d{4})0+$/, "$1");
+  return places === "" ? digits : `${digits}.${places}`;
 }

@@ -11,7 +11,7 @@ import { BrokenBuild } from "./broken-build.tsx";
 import { BuildSheet } from "./build-sheet.tsx";
 import { ChoiceQuestion } from "./choice-question.tsx";
 import { EarlierBuild } from "./earlier-build.tsx";
-import { NumberQuestion } from "./number-question.tsx";
+import { NumberGroups } from "./number-groups.tsx";
 import { StepHeading } from "./step-heading.tsx";
 import { reviewStep } from "./step-list.tsx";
 import { stepOf } from "./what-is-missing.tsx";
@@ -27,11 +27,6 @@ export function StepForm({ step }: { step: Step }) {
     event.preventDefault();
     void navigate({ pathname: stepPath(next?.id ?? reviewStep), search });
   };
-  const numbers = catalogue.numbers.filter(
-    ({ id, onlyWith }) =>
-      step.numbers.includes(id) &&
-      (onlyWith === undefined || build.answers[onlyWith.choice] === onlyWith.option),
-  );
   return (
     <form onSubmit={goOn} noValidate className="[&_input]:scroll-my-28">
       <StepHeading title={step.name} position={position} intro={step.intro} />
@@ -71,12 +66,11 @@ export function StepForm({ step }: { step: Step }) {
             return (
               <div key={id} id={id} className="scroll-mt-4">
                 <ChoiceQuestion choice={choice} state={state} />
+                <NumberGroups step={step} choice={id} />
               </div>
             );
           })}
-          {numbers.map((field) => (
-            <NumberQuestion key={field.id} field={field} />
-          ))}
+          <NumberGroups step={step} choice={null} />
         </div>
       </BuildSheet>
     </form>

@@ -1,0 +1,86 @@
+import type { RuleDocument } from "./document.ts";
+import { choice, common, invented } from "./rule-parts.ts";
+
+/** Dipstick, mounts, coating, reports and kits. */
+export const finishingRules: RuleDocument[] = [
+  {
+    id: "dry-sump-dipstick",
+    kind: "expression",
+    severity: "stop",
+    sentence: "With a dry sump the dipstick's hole stays undrilled.",
+    why: `The oil stands in the tank and is read there; the pan is pumped empty. ${common}`,
+    when: choice("oiling", "drySump"),
+    require: choice("dipstickSide", "undrilled"),
+  },
+  {
+    id: "wet-sump-dipstick",
+    kind: "expression",
+    severity: "note",
+    sentence: "With no dipstick in the block, take a pan that has its own.",
+    why: `A wet sump's level must be read somewhere. ${common}`,
+    when: choice("oiling", "wetSump"),
+    require: choice("dipstickSide", "left", "right"),
+  },
+  {
+    id: "front-plate-pump-pad",
+    kind: "expression",
+    severity: "stop",
+    sentence: "A front plate covers the fuel-pump pad.",
+    why: `The plate spans the whole front below the cam. ${invented}`,
+    when: choice("mounts", "frontPlate"),
+    require: choice("fuelPumpPad", "plainPad"),
+  },
+  {
+    id: "front-plate-street",
+    kind: "expression",
+    severity: "caution",
+    sentence: "A front plate passes every shake of the engine into the frame: seldom wanted on the road.",
+    why: `It is bolted metal to metal. ${common}`,
+    when: choice("mounts", "frontPlate"),
+    require: { not: choice("duty", "street") },
+  },
+  {
+    id: "marine-coating",
+    kind: "expression",
+    severity: "caution",
+    sentence: "In a boat, bare iron rusts from the day it is fitted: have it painted.",
+    why: `Salt and damp stay in the engine space. ${common}`,
+    when: choice("duty", "marine"),
+    require: choice("coating", "painted", "sealed"),
+  },
+  {
+    id: "sealed-case-rough-bore",
+    kind: "expression",
+    severity: "caution",
+    sentence: "A sealed case should not be bored afterwards: take a bore that leaves only the hone.",
+    why: `Chips and coolant get under the sealer's edge, and it comes off into the oil. ${common}`,
+    when: choice("coating", "sealed"),
+    require: choice("boreFinish", "semiFinished", "finishHoned", "honedToMyPistons"),
+  },
+  {
+    id: "full-report-walls",
+    kind: "expression",
+    severity: "stop",
+    sentence: "The full measurement report contains the wall readings, so the sonic report goes with it.",
+    why: `A report without its walls is not full. ${invented}`,
+    when: choice("fullReport", "fullReport"),
+    require: choice("sonicReport", "sonic"),
+  },
+  {
+    id: "main-bolts-later-studs",
+    kind: "expression",
+    severity: "note",
+    sentence:
+      "The mains are bored with bolts in: after a later change to studs, have the bores measured again.",
+    why: `Studs pull the caps another way than bolts do. ${common}`,
+    require: choice("mainStudKit", "mainStuds"),
+  },
+  {
+    id: "stud-torque",
+    kind: "expression",
+    severity: "note",
+    sentence: "Head studs go in hand-tight; use the kit's own lubricant and torque, in its sequence.",
+    why: `Torque holds only for the lubricant that it was found with. ${common}`,
+    require: choice("headStudKit", "noHeadStuds"),
+  },
+];
