@@ -22,7 +22,7 @@ export function wishesInTheWay(context: EvaluationContext, target: Target): Wish
 interface Wish {
   wish: string;
   without: Target;
-  say(found: readonly Candidate[]): string;
+  say: (found: readonly Candidate[]) => string;
 }
 
 const leastPrice = (found: readonly Candidate[]): string =>
