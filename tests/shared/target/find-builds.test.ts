@@ -4,6 +4,7 @@ import { checkOrderable } from "#shared/rules/check-orderable.ts";
 import { compileCatalogue } from "#shared/rules/compile.ts";
 import type { EvaluationContext } from "#shared/rules/evaluation.ts";
 import { totalsOf } from "#shared/rules/totals.ts";
+import { findCandidates } from "#shared/target/candidates.ts";
 import { findBuilds, type RankedBuild } from "#shared/target/find-builds.ts";
 import type { Target } from "#shared/target/target.ts";
 import { demoContext } from "../demo/context.ts";
@@ -70,17 +71,29 @@ describe("builds for a target on the demo catalogue", { timeout: 120_000 }, () =
           expect(one.priceCents).toBeLessThanOrEqual(target.budgetCents ?? Infinity);
           expect(one.shipsOn <= (target.shipBy ?? "9999-12-31")).toBe(true);
         }
-        // None is beaten by another.
-        for (const one of builds) {
-          const better = builds.filter(
+        // None is beaten by another: whole per cent off the middle and cautions make the misfit.
+        const { least = 0, most = 0 } = target.displacement ?? {};
+        const misfit = ({ fit }: RankedBuild): number =>
+          fit.cautions + (most === 0 ? 0 : Math.floor((200 * (fit.offMiddle ?? 0)) / (least + most)));
+        const reached = builds.filter(({ power }) => power?.reached !== false);
+        for (const one of reached) {
+          const better = reached.filter(
             (other) =>
               other.priceCents < one.priceCents &&
               other.shipDay <= one.shipDay &&
-              other.fit.cautions <= one.fit.cautions &&
-              (other.power?.high ?? 0) >= (target.power ?? 0),
+              misfit(other) <= misfit(one),
           );
           expect(better).toEqual([]);
         }
+        // The cheapest and the soonest of all that can be are there, if the power aimed at leaves none out.
+        const { found } = findCandidates(demoContext, target);
+        if (target.power !== undefined) return;
+        expect(builds[0]?.priceCents).toBe(
+          found.length === 0 ? undefined : Math.min(...found.map(({ priceCents }) => priceCents)),
+        );
+        expect(builds.map(({ shipsOn }) => shipsOn).sort()[0]).toBe(
+          found.map(({ ships }) => ships.date).sort()[0],
+        );
       }),
       { numRuns: 40 },
     );
