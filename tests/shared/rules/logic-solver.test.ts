@@ -1,4 +1,4 @@
-import * as Logic from "logic-solver";
+import Logic from "logic-solver";
 import { describe, expect, test } from "vitest";
 import { emptyBuild, type Build } from "#shared/catalogue/build.ts";
 import { evaluate } from "#shared/rules/evaluate.ts";

@@ -1,4 +1,4 @@
-import * as Logic from "logic-solver";
+import Logic from "logic-solver";
 import type { Build } from "#shared/catalogue/build.ts";
 import type { Catalogue } from "#shared/catalogue/catalogue.ts";
 import { compileCatalogue } from "#shared/rules/compile.ts";
