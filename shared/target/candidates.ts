@@ -27,7 +27,7 @@ export interface Candidates {
 }
 
 /** What decides displacement and strength, and tells answers apart; all else follows from them as cheaply as can be. */
-export const leadingChoices = ["bore", "rotatingAssembly", "capStyle"];
+const leadingChoices = ["bore", "rotatingAssembly", "capStyle"];
 
 /**
  * For every family, bore, rotating assembly and cap style that can meet the target: its best complete builds, such that no other

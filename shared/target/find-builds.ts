@@ -5,7 +5,7 @@ import { findingsOf } from "../rules/findings.ts";
 import type { Assignment } from "../rules/problem.ts";
 import type { Numbers } from "../rules/rule-table.ts";
 import { totalsOf } from "../rules/totals.ts";
-import { findCandidates, leadingChoices, type Candidate, type Candidates } from "./candidates.ts";
+import { findCandidates, type Candidate, type Candidates } from "./candidates.ts";
 import type { PowerReach } from "./power-reach.ts";
 import type { Target } from "./target.ts";
 import { tradeOffsOf } from "./trade-offs.ts";
@@ -46,7 +46,8 @@ interface Weighed extends Measured {
   weight: number;
   wall: number | null;
   offMiddle: number | null;
-  /** Family, bore, stroke and cap style. */
+  /** Family, stroke and cap style, and the same with the bore. */
+  group: string;
   kind: string;
 }
 
@@ -190,15 +191,15 @@ function weigh(
 ): Weighed {
   const { assignment, stroke } = measured;
   const family = assignment[compiled.familyChoice] ?? -1;
-  const told = leadingChoices
-    .filter((id) => id !== "rotatingAssembly")
-    .map((id) => assignment[compiled.choiceIndex.get(id) ?? -1] ?? -1);
+  const answer = (id: string): number => assignment[compiled.choiceIndex.get(id) ?? -1] ?? -1;
+  const group = `${family} ${stroke ?? "unknown"} ${answer("capStyle")}`;
   return {
     ...measured,
     weight: totalsOf(context, compiled, assignment, numbers)?.weight ?? 0,
     wall: compiled.reading(family, (choice) => assignment[choice] ?? -1, numbers).figure("wall"),
     offMiddle: offMiddle(measured, middleOf(target)),
-    kind: [family, stroke, ...told].join(" "),
+    group,
+    kind: `${group} ${answer("bore")}`,
   };
 }
 
@@ -219,7 +220,10 @@ function compareAssignments(a: Assignment, b: Assignment): number {
   return at < 0 ? 0 : (a[at] ?? 0) - (b[at] ?? 0);
 }
 
-/** The best in each respect first, so that every respect has its best; then by rank; no two of a kind. In the order of rank. */
+/**
+ * The best in each respect first, so that every respect has its best; then the best of each family, stroke and cap style; then by
+ * rank; no two of a kind. In the order of rank.
+ */
 function choose(ranked: readonly Weighed[], most: number): Weighed[] {
   const respects: ((one: Weighed) => number)[] = [
     (one) => one.priceCents,
@@ -235,8 +239,13 @@ function choose(ranked: readonly Weighed[], most: number): Weighed[] {
     if (one !== undefined && taken.size < most && !taken.has(one.kind)) taken.set(one.kind, one);
   };
   for (const respect of respects) {
-    const best = Math.min(...ranked.map(respect));
+    const best = ranked.reduce((least, one) => Math.min(least, respect(one)), Number.POSITIVE_INFINITY);
     take(ranked.find((one) => respect(one) === best));
+  }
+  const groups = new Set<string>();
+  for (const one of ranked) {
+    if (!groups.has(one.group)) take(one);
+    groups.add(one.group);
   }
   for (const one of ranked) take(one);
   const chosen = new Set(taken.values());

@@ -11,7 +11,7 @@ function wishes(target: Target): string[] {
   return wishesInTheWay(demoContext, target).map(({ wish }) => wish);
 }
 
-describe("when nothing fits", () => {
+describe("when nothing fits", { timeout: 120_000 }, () => {
   test("a budget that is too small is named, with what such builds start at", () => {
     const target: Target = { ...street, budgetCents: 100_000 };
     const [cheapest] = findBuilds(demoContext, street);
