@@ -8,7 +8,7 @@ function disc(diameter: number, height: number): number {
 }
 
 /** What stands above the piston of one cylinder at top dead centre. */
-export interface ClearanceSpace {
+interface ClearanceSpace {
   /** Inches. */
   bore: number;
   /** Chamber of the head, cc. */

@@ -18,12 +18,12 @@ const threads = {
 } as const;
 
 /** A thread of the table: nominal diameter, in, and threads per inch. */
-export type Thread = keyof typeof threads;
+type Thread = keyof typeof threads;
 
 /** Proof strength, psi, of the sizes in the table. */
 const proofStrength = { 2: 55_000, 5: 85_000, 8: 120_000 } as const;
 
-export type BoltGrade = keyof typeof proofStrength;
+type BoltGrade = keyof typeof proofStrength;
 
 /** Share of the proof load for joints that are taken apart again. */
 const reusableShare = 0.75;

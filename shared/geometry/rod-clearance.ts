@@ -10,7 +10,7 @@ import { nearestPassing, withinTurn, type PassedPoint } from "./swing.ts";
  */
 
 /** A place in the block, looking from the front: [to the right, up] from the crankshaft axis, inches. */
-export type Place = readonly [right: number, up: number];
+type Place = readonly [right: number, up: number];
 
 export interface NearestApproach {
   /** Least distance, inches, rounded to 0.0001 in; negative = the rod would cut in. */

@@ -19,6 +19,12 @@ export interface CompiledCatalogue {
   numberFields: ReadonlyMap<string, NumberField>;
   /** By choice: 1 where the iron that is bored out depends on it. */
   borings: Uint8Array;
+  /** Weights of a family's iron that are known at the typed numbers, by the answers of these choices. */
+  ironWeights(family: number, numbers: Numbers): Map<number, number>;
+  /** By flat option index: which options take the same minutes at every work centre; 0 = none. */
+  works: Int32Array;
+  /** Ids of the choices in the order of the steps; a choice of no step comes last. */
+  order: readonly string[];
   /** Families by option index of the family choice. */
   families: readonly Family[];
   reading(family: number, optionIndexOf: (choice: number) => number, numbers: Numbers): LiveReading;
@@ -108,6 +114,7 @@ function compile(catalogue: Catalogue): CompiledCatalogue {
     ),
   );
 
+  const boring = dependenciesOf(boringReads, { suppliers, gates, numberFields });
   const known = answerReader(choices);
   const exists: CompiledCatalogue["exists"] = (family, choice, option) =>
     family < 0 || choice === familyChoice || existence[family]?.[(offsets[choice] ?? 0) + option] === 1;
@@ -122,7 +129,10 @@ function compile(catalogue: Catalogue): CompiledCatalogue {
     stops,
     figures: figureDefinitions,
     numberFields,
-    borings: boringsOf(choices, dependenciesOf(boringReads, { suppliers, gates, numberFields }).choices),
+    borings: boringsOf(choices, boring.choices),
+    ironWeights: keptByNumbers([boring], () => new Map<number, number>()),
+    works: worksOf(choices),
+    order: [...new Set([...catalogue.steps.flatMap((step) => step.choices), ...choices.map(({ id }) => id)])],
     families,
     reading,
     tables,
@@ -148,6 +158,20 @@ const boringReads = {
 
 function boringsOf(choices: readonly Choice[], ids: readonly string[]): Uint8Array {
   return Uint8Array.from(choices, ({ id }) => Number(ids.includes(id)));
+}
+
+function worksOf(choices: readonly Choice[]): Int32Array {
+  const marks = new Map<string, number>([[JSON.stringify([]), 0]]);
+  return Int32Array.from(
+    choices.flatMap(({ options }) => options),
+    ({ minutes }) => {
+      const taken = Object.entries(minutes).filter(([, own]) => own !== 0);
+      const key = JSON.stringify(taken.sort(([a], [b]) => (a < b ? -1 : 1)));
+      const mark = marks.get(key) ?? marks.size;
+      marks.set(key, mark);
+      return mark;
+    },
+  );
 }
 
 function familiesOf(catalogue: Catalogue, choice: Choice | undefined): Family[] {
@@ -199,13 +223,14 @@ const mostKept = 48;
 
 /** Keeps what is made for a family and the typed numbers that these rules read. */
 function keptByNumbers<Made>(
-  rules: readonly CompiledRule[],
+  rules: readonly Pick<CompiledRule, "numbers">[],
   make: (family: number, numbers: Numbers) => Made,
 ): (family: number, numbers: Numbers) => Made {
   const read = [...new Set(rules.flatMap(({ numbers }) => numbers))].sort();
   const kept = new Map<string, Made>();
   return (family, numbers) => {
-    const key = `${family} ${JSON.stringify(read.map((id) => numbers[id]))}`;
+    const typed = read.filter((id) => numbers[id] !== undefined);
+    const key = `${family} ${typed.length === 0 ? "" : JSON.stringify(typed.map((id) => [id, numbers[id]]))}`;
     const made = kept.get(key) ?? make(family, numbers);
     // What was asked for last goes last.
     kept.delete(key);

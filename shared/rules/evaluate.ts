@@ -48,14 +48,9 @@ function knownBuild(compiled: CompiledCatalogue, assignment: Assignment, build: 
   return { ...build, answers: Object.fromEntries(answers) };
 }
 
-/** Unanswered choices in the order of the steps; a choice of no step comes last. */
+/** Unanswered choices in the order of the steps. */
 function unansweredChoices(compiled: CompiledCatalogue, assignment: Assignment): string[] {
-  const stepped = compiled.catalogue.steps.flatMap((step) => step.choices);
-  const order = new Set([...stepped, ...compiled.choices.map((choice) => choice.id)]);
-  return [...order].filter((id) => {
-    const index = compiled.choiceIndex.get(id);
-    return index !== undefined && assignment[index] === -1;
-  });
+  return compiled.order.filter((id) => assignment[compiled.choiceIndex.get(id) ?? -1] === -1);
 }
 
 function choiceStates(

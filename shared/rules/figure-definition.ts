@@ -24,7 +24,7 @@ export interface FigureDefinition {
 export type Described = Pick<FigureDefinition, "id" | "name" | "unit" | "places" | "formula">;
 
 /** Named values of the family and the options, and typed numbers, that a figure reads. */
-export interface Reads<Value extends string, Typed extends string> {
+interface Reads<Value extends string, Typed extends string> {
   values?: readonly Value[];
   numbers?: readonly Typed[];
 }

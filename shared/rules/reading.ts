@@ -53,49 +53,67 @@ export interface LiveReading extends Reading {
 }
 
 export function createReading(source: ReadingSource): LiveReading {
-  const known = new Map<string, number | null>();
-  const reading: LiveReading = {
-    forget: () => {
-      known.clear();
-    },
-    family: source.family,
-    chosen: (choice) => source.optionOf(choice)?.id ?? null,
-    value(name) {
-      for (const choice of source.suppliersOfValue.get(name) ?? []) {
-        const option = source.optionOf(choice);
-        if (option === null) continue;
-        // A number of the same name that the option reads stands for the value, known or not.
-        if (option.reads.includes(name)) return reading.number(name);
-        const value = optionValue(option, source.family, name);
-        if (value !== undefined) return value;
-      }
-      return source.family?.values[name] ?? null;
-    },
-    word(name) {
-      for (const choice of source.suppliersOfWord.get(name) ?? []) {
-        const word = source.optionOf(choice)?.words[name];
-        if (word !== undefined) return word;
-      }
-      return null;
-    },
-    number(id) {
-      const text = source.numbers[id];
-      const field = source.numberFields.get(id);
-      if (text === undefined || field === undefined || numberProblem(field, text) !== null) return null;
-      const gates = source.gates.get(id) ?? [];
-      const read =
-        gates.length === 0 || gates.some(([choice, option]) => source.optionOf(choice)?.id === option);
-      return read ? Number(text) : null;
-    },
-    figure(id) {
-      const cached = known.get(id);
-      if (cached !== undefined) return cached;
-      const figure = source.figures.get(id)?.(reading) ?? null;
-      known.set(id, figure);
-      return figure;
-    },
-  };
-  return reading;
+  return new SourceReading(source);
+}
+
+/** A class, since thousands of them are made when tables are filled. */
+class SourceReading implements LiveReading {
+  readonly family: Family | null;
+  readonly #source: ReadingSource;
+  readonly #figures = new Map<string, number | null>();
+
+  constructor(source: ReadingSource) {
+    this.#source = source;
+    this.family = source.family;
+  }
+
+  forget(): void {
+    this.#figures.clear();
+  }
+
+  chosen(choice: string): string | null {
+    return this.#source.optionOf(choice)?.id ?? null;
+  }
+
+  value(name: string): number | null {
+    const { suppliersOfValue, family } = this.#source;
+    for (const choice of suppliersOfValue.get(name) ?? []) {
+      const option = this.#source.optionOf(choice);
+      if (option === null) continue;
+      // A number of the same name that the option reads stands for the value, known or not.
+      if (option.reads.includes(name)) return this.number(name);
+      const value = optionValue(option, family, name);
+      if (value !== undefined) return value;
+    }
+    return family?.values[name] ?? null;
+  }
+
+  word(name: string): string | null {
+    for (const choice of this.#source.suppliersOfWord.get(name) ?? []) {
+      const word = this.#source.optionOf(choice)?.words[name];
+      if (word !== undefined) return word;
+    }
+    return null;
+  }
+
+  number(id: string): number | null {
+    const source = this.#source;
+    const text = source.numbers[id];
+    const field = source.numberFields.get(id);
+    if (text === undefined || field === undefined || numberProblem(field, text) !== null) return null;
+    const gates = source.gates.get(id) ?? [];
+    const read =
+      gates.length === 0 || gates.some(([choice, option]) => source.optionOf(choice)?.id === option);
+    return read ? Number(text) : null;
+  }
+
+  figure(id: string): number | null {
+    const cached = this.#figures.get(id);
+    if (cached !== undefined) return cached;
+    const figure = this.#source.figures.get(id)?.(this) ?? null;
+    this.#figures.set(id, figure);
+    return figure;
+  }
 }
 
 /** The quantity of an expression; null where a part of it is not known. */

@@ -42,7 +42,9 @@ export function totalsOf(
   }
   return {
     priceCents,
-    weight: optionWeight + ironWeight(compiled, family, assignment, numbers),
+    weight:
+      optionWeight +
+      ironWeight(compiled, family, compiled.ironWeights(familyIndex, numbers), assignment, numbers),
     minutes,
     leadDays,
     ships: shipDateOf(context.load, context.today, minutes, leadDays),
@@ -63,20 +65,30 @@ export function createEffects(
     return { totals, effectOf: () => ({ priceCents: null, weight: null, days: null }) };
   }
   const { options: amounts } = amountsOf(compiled, context.priceList, familyIndex);
-  const iron = ironWeight(compiled, family, assignment, numbers);
+  const weights = compiled.ironWeights(familyIndex, numbers);
+  const iron = ironWeight(compiled, family, weights, assignment, numbers);
   const leadWithout = leadsWithout(compiled, family, assignment);
   const trial = assignment.slice();
 
-  const daysOf = (choice: number, option: Option, before: Option | undefined): number => {
+  /** Days by what changes: the work of the option, that of the answer it replaces, and the longest lead. */
+  const known = new Map<string, number>();
+  const daysOf = (choice: number, option: Option, at: number): number => {
+    const from = compiled.offsets[choice] ?? 0;
+    const answer = assignment[choice] ?? -1;
+    const work = compiled.works[from + at] ?? 0;
+    const before = answer < 0 ? 0 : (compiled.works[from + answer] ?? 0);
     const leadDays = Math.max(leadWithout(choice), option.leadDays);
-    const same = workCentreSchema.options.every(
-      (centre) => (option.minutes[centre] ?? 0) === (before?.minutes[centre] ?? 0),
-    );
-    if (same && leadDays === totals.leadDays) return 0;
+    if (work === before && leadDays === totals.leadDays) return 0;
+    const key = `${work} ${before} ${leadDays}`;
+    const found = known.get(key);
+    if (found !== undefined) return found;
     const minutes = { ...totals.minutes };
     addMinutes(minutes, option, 1);
-    if (before !== undefined) addMinutes(minutes, before, -1);
-    return shipDateOf(context.load, context.today, minutes, leadDays).day - totals.ships.day;
+    const replaced = compiled.choices[choice]?.options[answer];
+    if (replaced !== undefined) addMinutes(minutes, replaced, -1);
+    const days = shipDateOf(context.load, context.today, minutes, leadDays).day - totals.ships.day;
+    known.set(key, days);
+    return days;
   };
 
   const effectOf = (choice: number, at: number): OptionEffect => {
@@ -93,11 +105,11 @@ export function createEffects(
       const before = options[answer];
       const from = compiled.offsets[choice] ?? 0;
       const lighter =
-        compiled.borings[choice] === 1 ? ironWeight(compiled, family, trial, numbers) - iron : 0;
+        compiled.borings[choice] === 1 ? ironWeight(compiled, family, weights, trial, numbers) - iron : 0;
       return {
         priceCents: (amounts[from + at] ?? 0) - (answer < 0 ? 0 : (amounts[from + answer] ?? 0)),
         weight: (option?.weight ?? 0) - (before?.weight ?? 0) + lighter,
-        days: option === undefined ? 0 : daysOf(choice, option, before),
+        days: option === undefined ? 0 : daysOf(choice, option, at),
       };
     } finally {
       trial[choice] = answer;
@@ -152,11 +164,30 @@ function addMinutes(sum: Minutes, { minutes }: Option, times: 1 | -1): void {
   }
 }
 
+/** Weight of the family's iron, lb; kept, since an option is weighed for every build in which it might be chosen. */
+function ironWeight(
+  compiled: CompiledCatalogue,
+  family: Family,
+  known: Map<number, number>,
+  assignment: Assignment,
+  numbers: Numbers,
+): number {
+  let cell = 0;
+  for (let choice = 0; choice < assignment.length; choice += 1) {
+    if (compiled.borings[choice] !== 1) continue;
+    const size = (compiled.choices[choice]?.options.length ?? 0) + 1;
+    cell = cell * size + (assignment[choice] ?? -1) + 1;
+  }
+  const weight = known.get(cell) ?? weighIron(compiled, family, assignment, numbers);
+  known.set(cell, weight);
+  return weight;
+}
+
 /**
  * Weight of the family's iron, lb. The bore as delivered counts, the finish bore while the finish is not chosen, the base bore
  * while no bore is; the family's lowest deck while none is chosen.
  */
-function ironWeight(
+function weighIron(
   compiled: CompiledCatalogue,
   family: Family,
   assignment: Assignment,

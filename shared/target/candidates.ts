@@ -27,7 +27,7 @@ export interface Candidates {
 }
 
 /** What decides displacement and strength, and tells answers apart; all else follows from them as cheaply as can be. */
-export const leadingChoices = ["bore", "rotatingAssembly", "capStyle"];
+const leadingChoices = ["bore", "rotatingAssembly", "capStyle"];
 
 /**
  * For every family, bore, rotating assembly and cap style that can meet the target: its best complete builds, such that no other
@@ -127,11 +127,14 @@ function shipDates(
   };
 }
 
+const rodOutline = "rodOutline";
+
 type Engine = Pick<Candidate, "displacement" | "stroke" | "power">;
 
 /**
  * Displacement and power of the leading answers given at the time; null where they miss the target. A displacement that is not
- * known is only taken where the rotating assembly is there already and none is wished for.
+ * known is only taken where the rotating assembly is there already and none is wished for, rods without an outline, which nothing
+ * is checked against, only where they are there already.
  */
 function createEngineReader(
   context: EvaluationContext,
@@ -142,6 +145,7 @@ function createEngineReader(
   const reading = compiled.reading(family, (choice) => given[choice] ?? -1, question.numbers);
   const { least = 0, most = Number.POSITIVE_INFINITY } = target.displacement ?? {};
   const fixed = question.mine.includes("rotatingAssembly");
+  const outlined = compiled.choices.some(({ options }) => options.some(({ words }) => rodOutline in words));
   const known = new Map<string, Engine | null>();
   const read = (): Engine | null => {
     reading.forget();
@@ -150,6 +154,7 @@ function createEngineReader(
     if (displacement === null || stroke === null)
       return fixed && target.displacement === undefined ? { displacement, stroke, power: null } : null;
     if (displacement < least || displacement > most) return null;
+    if (outlined && !fixed && reading.word(rodOutline) === null) return null;
     return {
       displacement,
       stroke,

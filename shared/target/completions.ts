@@ -18,7 +18,7 @@ export interface Completion {
 }
 
 /** For answers to the leading choices: the best ways to answer all others. */
-export interface Completions {
+interface Completions {
   /** None where the answers cannot stand; else every way that no other beats in price, lead and minutes at once. */
   of(leading: Assignment): readonly Completion[];
 }

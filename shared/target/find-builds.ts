@@ -1,11 +1,11 @@
 import type { Build } from "../catalogue/build.ts";
 import type { CompiledCatalogue } from "../rules/compile.ts";
-import { evaluate } from "../rules/evaluate.ts";
 import type { EvaluationContext } from "../rules/evaluation.ts";
+import { findingsOf } from "../rules/findings.ts";
 import type { Assignment } from "../rules/problem.ts";
 import type { Numbers } from "../rules/rule-table.ts";
 import { totalsOf } from "../rules/totals.ts";
-import { findCandidates, leadingChoices, type Candidate, type Candidates } from "./candidates.ts";
+import { findCandidates, type Candidate, type Candidates } from "./candidates.ts";
 import type { PowerReach } from "./power-reach.ts";
 import type { Target } from "./target.ts";
 import { tradeOffsOf } from "./trade-offs.ts";
@@ -38,7 +38,7 @@ export interface RankedBuild {
 
 interface Measured extends Candidate {
   cautions: number;
-  /** How far it is from what was asked for: per cent short of the power, and one for every caution. */
+  /** How far it is from what was asked for: whole per cent short of the power and off the middle, and one for every caution. */
   misfit: number;
 }
 
@@ -46,7 +46,8 @@ interface Weighed extends Measured {
   weight: number;
   wall: number | null;
   offMiddle: number | null;
-  /** Family, bore, stroke and cap style. */
+  /** Family, stroke and cap style, and the same with the bore. */
+  group: string;
   kind: string;
 }
 
@@ -73,7 +74,7 @@ export function findBuilds(
       numbers: { ...question.numbers },
       mine: [...question.mine],
     };
-    const { findings } = evaluate(context, build);
+    const findings = findingsOf(compiled, one.assignment, question.numbers);
     return {
       build,
       priceCents: one.priceCents,
@@ -108,42 +109,64 @@ function shortfall({ power }: Candidate, target: Target): number {
   return Math.max(0, (100 * (target.power - power.high)) / target.power);
 }
 
+function middleOf({ displacement }: Target): number | null {
+  const { least, most } = displacement ?? {};
+  return least === undefined || most === undefined ? null : (least + most) / 2;
+}
+
+function offMiddle({ displacement }: Candidate, middle: number | null): number | null {
+  return middle === null || displacement === null ? null : Math.abs(displacement - middle);
+}
+
 /** Candidates that no other beats in price, date and fit. Those that reach the power aimed at, if any does, leave the others out. */
 function frontOf({ compiled, question, found }: Candidates, target: Target): Measured[] {
   const reached = found.some((candidate) => shortfall(candidate, target) === 0);
+  const middle = middleOf(target);
+  const farOff = (one: Candidate): number =>
+    middle === null ? 0 : Math.floor((100 * (offMiddle(one, middle) ?? 0)) / middle);
   const sorted = found
     .map((candidate) => ({ candidate, short: shortfall(candidate, target) }))
     .filter(({ short }) => !reached || short === 0)
+    .map(({ candidate, short }) => ({ candidate, missed: Math.floor(short) + farOff(candidate) }))
     .sort(
       (a, b) =>
         a.candidate.priceCents - b.candidate.priceCents ||
         a.candidate.ships.day - b.candidate.ships.day ||
-        a.short - b.short,
+        a.missed - b.missed,
     );
+  // What is kept so far, one of each price, date and misfit: none that comes later is cheaper.
+  const marks = new Map<string, Mark>();
   const kept: Measured[] = [];
-  // Only these can beat a later one: by date, the least misfit so far.
-  const best = new Map<number, Measured>();
-  const beaten = (candidate: Candidate, misfit: number): boolean =>
-    [...best.values()].some(
-      (other) =>
-        other.ships.day <= candidate.ships.day &&
-        other.misfit <= misfit &&
-        (other.priceCents < candidate.priceCents ||
-          other.ships.day < candidate.ships.day ||
-          other.misfit < misfit),
-    );
-  for (const { candidate, short } of sorted) {
-    if (beaten(candidate, short)) continue;
+  for (const { candidate, missed } of sorted) {
+    const { priceCents, ships } = candidate;
+    const mark = { priceCents, day: ships.day, misfit: missed };
+    // Cautions only add to the misfit, and are asked for only where that may matter.
+    if (isBeaten(mark, marks)) continue;
     const cautions = cautionsOf(compiled, candidate.assignment, question.numbers);
-    const misfit = short + cautions;
-    if (beaten(candidate, misfit)) continue;
-    const measured = { ...candidate, cautions, misfit };
-    kept.push(measured);
-    const known = best.get(candidate.ships.day);
-    if (known === undefined || misfit < known.misfit) best.set(candidate.ships.day, measured);
+    mark.misfit = missed + cautions;
+    if (isBeaten(mark, marks)) continue;
+    kept.push({ ...candidate, cautions, misfit: mark.misfit });
+    marks.set(`${priceCents} ${mark.day} ${mark.misfit}`, mark);
   }
-  // Of one price and date a later one may fit better than an earlier one.
-  return kept.filter((one) => !beaten(one, one.misfit));
+  // Of one price a later one may still beat an earlier one.
+  return kept.filter(
+    ({ priceCents, ships, misfit }) => !isBeaten({ priceCents, day: ships.day, misfit }, marks),
+  );
+}
+
+/** Price, date and fit of a candidate; less is better. */
+interface Mark {
+  priceCents: number;
+  day: number;
+  misfit: number;
+}
+
+function isBeaten(mark: Mark, marks: ReadonlyMap<string, Mark>): boolean {
+  for (const other of marks.values()) {
+    if (other.priceCents > mark.priceCents || other.day > mark.day || other.misfit > mark.misfit) continue;
+    if (other.priceCents < mark.priceCents || other.day < mark.day || other.misfit < mark.misfit) return true;
+  }
+  return false;
 }
 
 function cautionsOf(compiled: CompiledCatalogue, assignment: Assignment, numbers: Numbers): number {
@@ -166,19 +189,17 @@ function weigh(
   target: Target,
   { measured, numbers }: { measured: Measured; numbers: Numbers },
 ): Weighed {
-  const { assignment, displacement, stroke } = measured;
+  const { assignment, stroke } = measured;
   const family = assignment[compiled.familyChoice] ?? -1;
-  const { least, most } = target.displacement ?? {};
-  const middle = least === undefined || most === undefined ? null : (least + most) / 2;
-  const told = leadingChoices
-    .filter((id) => id !== "rotatingAssembly")
-    .map((id) => assignment[compiled.choiceIndex.get(id) ?? -1] ?? -1);
+  const answer = (id: string): number => assignment[compiled.choiceIndex.get(id) ?? -1] ?? -1;
+  const group = `${family} ${stroke ?? "unknown"} ${answer("capStyle")}`;
   return {
     ...measured,
     weight: totalsOf(context, compiled, assignment, numbers)?.weight ?? 0,
     wall: compiled.reading(family, (choice) => assignment[choice] ?? -1, numbers).figure("wall"),
-    offMiddle: middle === null || displacement === null ? null : Math.abs(displacement - middle),
-    kind: [family, stroke, ...told].join(" "),
+    offMiddle: offMiddle(measured, middleOf(target)),
+    group,
+    kind: `${group} ${answer("bore")}`,
   };
 }
 
@@ -199,7 +220,10 @@ function compareAssignments(a: Assignment, b: Assignment): number {
   return at < 0 ? 0 : (a[at] ?? 0) - (b[at] ?? 0);
 }
 
-/** The best in each respect first, so that every respect has its best; then by rank; no two of a kind. In the order of rank. */
+/**
+ * The best in each respect first, so that every respect has its best; then the best of each family, stroke and cap style; then by
+ * rank; no two of a kind. In the order of rank.
+ */
 function choose(ranked: readonly Weighed[], most: number): Weighed[] {
   const respects: ((one: Weighed) => number)[] = [
     (one) => one.priceCents,
@@ -215,8 +239,13 @@ function choose(ranked: readonly Weighed[], most: number): Weighed[] {
     if (one !== undefined && taken.size < most && !taken.has(one.kind)) taken.set(one.kind, one);
   };
   for (const respect of respects) {
-    const best = Math.min(...ranked.map(respect));
+    const best = ranked.reduce((least, one) => Math.min(least, respect(one)), Number.POSITIVE_INFINITY);
     take(ranked.find((one) => respect(one) === best));
+  }
+  const groups = new Set<string>();
+  for (const one of ranked) {
+    if (!groups.has(one.group)) take(one);
+    groups.add(one.group);
   }
   for (const one of ranked) take(one);
   const chosen = new Set(taken.values());

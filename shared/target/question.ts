@@ -67,7 +67,11 @@ export function targetProblems(
   ];
 }
 
-/** By flat option index: 1 where the option exists in the family, keeps the answers given and has the sizes that are there. */
+/**
+ * By flat option index: 1 where the option exists in the family, keeps the answers given and has the sizes that are there. An
+ * option that reads numbers is only taken where it is given or all of them are typed: what is not known would close nothing, and
+ * the cheapest answer would be the one that is checked least.
+ */
 export function allowedOptions(
   compiled: CompiledCatalogue,
   { given, numbers }: Question,
@@ -76,6 +80,7 @@ export function allowedOptions(
   const id = compiled.families[family]?.id ?? "";
   const sizes = Object.entries(numbers).map(([name, text]) => [name, Number(text)] as const);
   const fits = (option: Option): boolean =>
+    option.reads.every((name) => numbers[name] !== undefined) &&
     sizes.every(([name, size]) => {
       const own = option.valuesByFamily[id]?.[name] ?? option.values[name];
       return own === undefined || option.reads.includes(name) || compareQuantities(own, size) === 0;

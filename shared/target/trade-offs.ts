@@ -12,10 +12,10 @@ interface Compared {
 
 interface Respect {
   /** The figure at the places that are told; greater is worse. Null where it is not known. */
-  of(one: Compared): number | null;
+  of: (one: Compared) => number | null;
   best: string;
   /** What is given up, by how much it is worse. */
-  worse(by: number): string;
+  worse: (by: number) => string;
 }
 
 const counted = (count: number, one: string): string => `${count} ${one}${count === 1 ? "" : "s"}`;

@@ -4,7 +4,7 @@ import { findCandidates, type Candidate } from "./candidates.ts";
 import type { Target } from "./target.ts";
 
 /** A wish that, left out alone, gives answers. */
-export interface WishInTheWay {
+interface WishInTheWay {
   /** Its path in the target, as "budgetCents" or "have.answers.mainSize". */
   wish: string;
   /** What is possible without it, in one plain line. */
@@ -22,11 +22,11 @@ export function wishesInTheWay(context: EvaluationContext, target: Target): Wish
 interface Wish {
   wish: string;
   without: Target;
-  say(found: readonly Candidate[]): string;
+  say: (found: readonly Candidate[]) => string;
 }
 
 const leastPrice = (found: readonly Candidate[]): string =>
-  formatCents(Math.min(...found.map(({ priceCents }) => priceCents)));
+  formatCents(found.reduce((least, { priceCents }) => Math.min(least, priceCents), Number.POSITIVE_INFINITY));
 
 function wishesOf({ catalogue }: EvaluationContext, target: Target): Wish[] {
   const { displacement, power, rpm, budgetCents, shipBy, have, ...rest } = target;

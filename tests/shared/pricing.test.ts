@@ -35,17 +35,17 @@ describe("price of a block", () => {
       },
       {
         kind: "option",
-        label: "Dowel kit: With dowel kit",
-        choice: "dowelKit",
-        option: "dowels",
-        amountCents: 3_200,
-      },
-      {
-        kind: "option",
         label: "Sonic report: With report",
         choice: "sonicReport",
         option: "sonic",
         amountCents: 12_500,
+      },
+      {
+        kind: "option",
+        label: "Dowel kit: With dowel kit",
+        choice: "dowelKit",
+        option: "dowels",
+        amountCents: 3_200,
       },
     ]);
     expect(price.totalCents).toBe(344_500);

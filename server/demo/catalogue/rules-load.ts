@@ -126,7 +126,8 @@ export const loadRules: RuleDocument[] = [
     severity: "caution",
     sentence: "Above 1,200 hp, compacted graphite iron is the safer choice.",
     why: `Webs and walls of grey iron come near their strength. ${invented}`,
-    when: choice("iron", "grey40"),
+    // Marl is poured of nothing else, and its caps end before.
+    when: { all: [choice("iron", "grey40"), choice("family", "basalt", "gneiss")] },
     require: numberAtMost("powerAim", 1200),
   },
   {
