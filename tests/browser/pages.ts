@@ -9,8 +9,7 @@ import { fillCart, signedIn, Visitor } from "../support/visitor.ts";
 import { expiredPayment, paidOrder } from "./shop-state.ts";
 
 /** Who looks at a page. */
-type Reader =
-  "visitor" | "cart" | "buyer" | "late" | "customer" | "dealer" | "planner" | "floor" | "office";
+type Reader = "visitor" | "cart" | "buyer" | "late" | "customer" | "dealer" | "planner" | "floor" | "office";
 
 /** What is known once the shop has been prepared. */
 export interface PreparedShop {

@@ -58,7 +58,9 @@ it("asks for eight skirts and the clearance only when the block is honed to them
   await user.tab();
   expect(skirt.getAttribute("aria-invalid")).toBe("true");
   expect(group.textContent).toMatch(/within 0\.0025 in of the bore chosen.*Set by/);
-  expect(within(group).getByRole("button", { name: /^Also change bore finish to rough bored/ })).toBeDefined();
+  expect(
+    within(group).getByRole("button", { name: /^Also change bore finish to rough bored/ }),
+  ).toBeDefined();
   expect(typedIn(router, "skirt3")).toBeNull();
   await user.clear(skirt);
   await user.type(skirt, "4.12050");
