@@ -87,6 +87,23 @@ export function createRuleTables(
     return found;
   };
 
+  /** By choice of the scope with options that read one of the numbers: 1 for these, by option index + 1. Null = always read. */
+  const readingOptions = (
+    readers: readonly (readonly (readonly [number, number])[])[],
+  ): { stride: number; size: number; reads: Uint8Array }[] | null => {
+    if (readers.some((options) => options.length === 0)) return null;
+    const options = readers.flat();
+    if (options.some(([choice]) => !scope.includes(choice))) return null;
+    return scope.flatMap((choice, at) => {
+      const own = options.filter(([reader]) => reader === choice);
+      if (own.length === 0) return [];
+      const size = sizes[at] ?? 1;
+      const reads = new Uint8Array(size);
+      for (const [, option] of own) reads[option + 1] = 1;
+      return [{ stride: strides[at] ?? 1, size, reads }];
+    });
+  };
+
   return {
     table(family, numbers) {
       const read = entry.numbers.filter((id) => numbers[id] !== undefined);
@@ -97,16 +114,15 @@ export function createRuleTables(
       if (found !== undefined) return found;
       if (withNumbers.size >= mostTables) withNumbers.clear();
       const base = plain(family);
-      const readers = read.map((id) => gates.get(id) ?? []);
-      const always = readers.some((options) => options.length === 0);
       // A number is read only with its option: where no such option stands, the table without numbers holds.
-      const unaffected = (cell: number): RuleTable | null =>
-        always ||
-        readers
-          .flat()
-          .some(([choice, option]) => !scope.includes(choice) || optionAt(cell, choice) === option)
-          ? null
-          : base;
+      const affected = readingOptions(read.map((id) => gates.get(id) ?? []));
+      const unaffected = (cell: number): RuleTable | null => {
+        if (affected === null) return null;
+        for (const { stride, size, reads } of affected) {
+          if (reads[Math.floor(cell / stride) % size] === 1) return null;
+        }
+        return base;
+      };
       const made = create(family, Object.fromEntries(texts), unaffected);
       withNumbers.set(key, made);
       return made;

@@ -66,28 +66,31 @@ export interface BruteMend {
   days: number | null;
 }
 
-/** The cheapest mend by trying every valid assignment as its end. */
+/** The cheapest mend by trying every valid assignment as its end; with nothing wanted, of the whole build. */
 export function bruteMend(
   random: RandomCatalogue,
   valid: readonly Full[],
   build: Build,
-  wanted: { choice: string; option: string },
+  wanted: { choice: string; option: string } | null,
 ): BruteMend | null {
   const { catalogue, priceList } = random;
   const now = worth(random, build.answers);
   // Only a change of an answered (or wanted) family leaves answers without an option.
-  const familyKnown = build.answers["family"] !== undefined || wanted.choice === "family";
+  const familyKnown = build.answers["family"] !== undefined || wanted?.choice === "family";
   const mends = valid
-    .filter((full) => full[wanted.choice] === wanted.option)
+    .filter((full) => wanted === null || full[wanted.choice] === wanted.option)
     .flatMap((full) => {
       const changes = catalogue.choices.flatMap(({ id }) => {
         const from = build.answers[id];
-        if (id === wanted.choice || from === undefined || full[id] === from) return [];
+        if (id === wanted?.choice || from === undefined || full[id] === from) return [];
         const lost = familyKnown && !made(catalogue, id, from, full["family"]);
         return [{ choice: id, from, to: lost ? null : (full[id] ?? null) }];
       });
       if (changes.some(({ choice }) => build.mine.includes(choice))) return [];
-      const answers: Record<string, string | null> = { ...build.answers, [wanted.choice]: wanted.option };
+      const answers: Record<string, string | null> = {
+        ...build.answers,
+        ...(wanted === null ? {} : { [wanted.choice]: wanted.option }),
+      };
       for (const { choice, to } of changes) answers[choice] = to;
       const kept = Object.fromEntries(
         Object.entries(answers).flatMap(([id, to]) => (to === null ? [] : [[id, to]])),

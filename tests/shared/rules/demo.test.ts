@@ -6,8 +6,8 @@ import { checkOrderable } from "#shared/rules/check-orderable.ts";
 import { compileCatalogue } from "#shared/rules/compile.ts";
 import { evaluate } from "#shared/rules/evaluate.ts";
 import { explain } from "#shared/rules/explain.ts";
-import { mend } from "#shared/rules/mend.ts";
-import { openFlags } from "#shared/rules/open-options.ts";
+import { mend, repair } from "#shared/rules/mend.ts";
+import { count, openFlags, openOptions } from "#shared/rules/open-options.ts";
 import { buildOf, demoContext, marl400 } from "../demo/context.ts";
 import { assignmentsOf, breaks, demoWith } from "../demo/solutions.ts";
 
@@ -67,6 +67,64 @@ describe("choosing on the demo catalogue", { timeout: 120_000 }, () => {
       }),
       { numRuns: 15 },
     );
+  });
+
+  test("undo brings back exactly what was", () => {
+    fc.assert(
+      fc.property(picks, fc.integer({ min: 1, max: 20 }), numbers, (drawn, back, typed) => {
+        const answers = Object.entries(walk(drawn, known(typed)).build.answers);
+        const builds = answers.map((_, length) =>
+          buildOf(Object.fromEntries(answers.slice(0, length)), known(typed)),
+        );
+        const before = builds.map((build) => evaluate(demoContext, build));
+        for (const at of [...builds.keys()].reverse().slice(0, back)) {
+          expect(evaluate(demoContext, builds[at] ?? emptyBuild)).toEqual(before[at]);
+        }
+      }),
+      { numRuns: 5 },
+    );
+  });
+
+  test("no question changes the build: not its typed numbers, nor what is mine", () => {
+    const build = buildOf({ ...marl400.answers, capStyle: "twoBolt" }, { powerAim: "640", rpmAim: "6900" }, [
+      "bore",
+    ]);
+    const before = structuredClone(build);
+    evaluate(demoContext, build);
+    mend(demoContext, build, { choice: "capStyle", option: "fourBoltStraight" });
+    explain(demoContext, build, { choice: "capStyle", option: "fourBoltStraight" });
+    repair(demoContext, build);
+    admitNumber(demoContext, build, "powerAim", "900");
+    expect(build).toEqual(before);
+  });
+
+  test("a limit met exactly passes, and the next step of the grid does not", () => {
+    const open = (answers: Build["answers"], choice: string, option: string, typed: Build["numbers"] = {}) =>
+      openOptions(demoContext, buildOf(answers, typed)).get(choice)?.includes(option);
+    // Marl: (4.615 - 4.155)/2 - 0.030 = 0.200 in of wall; boosted (4.615 - 4.055)/2 - 0.030 = 0.250 in.
+    const marl = { family: "marl" };
+    expect(open({ ...marl, induction: "naturallyAspirated" }, "bore", "b4155")).toBe(true);
+    expect(open({ ...marl, induction: "boosted" }, "bore", "b4055")).toBe(true);
+    expect(open({ ...marl, induction: "boosted" }, "bore", "b4060")).toBe(false);
+    // Basalt: a web of 4.400 - 4.200 = 0.200 in.
+    expect(open({ family: "basalt" }, "bore", "b4200")).toBe(true);
+    expect(open(marl, "capStyle", "twoBolt", { powerAim: "450", rpmAim: "6000" })).toBe(true);
+    expect(open(marl, "capStyle", "twoBolt", { powerAim: "451" })).toBe(false);
+    expect(open(marl, "capStyle", "twoBolt", { rpmAim: "6001" })).toBe(false);
+  });
+
+  test("a build saved under an older catalogue is repaired: what is gone is dropped, what breaks a rule is changed", () => {
+    const saved = buildOf({ ...marl400.answers, induction: "boosted", deckHeight: "d9000", colour: "red" });
+    const offered = repair(demoContext, saved);
+    expect(offered?.changes).toContainEqual({ choice: "deckHeight", from: "d9000", to: null });
+    const changed = Object.fromEntries(offered?.changes.map(({ choice, to }) => [choice, to]) ?? []);
+    const answers = Object.entries({ ...saved.answers, ...changed }).flatMap(([choice, option]) =>
+      option === null || choice === "colour" ? [] : [[choice, option] as const],
+    );
+    expect(repair(demoContext, buildOf(Object.fromEntries(answers)))).toBeNull();
+    expect(count(demoContext, buildOf(Object.fromEntries(answers)))).toBeGreaterThan(0n);
+    expect(repair(demoContext, { ...saved, mine: ["deckHeight"] })).toBeNull();
+    expect(repair(demoContext, marl400)).toBeNull();
   });
 
   test("a closed option's mend opens it, keeps what is mine and every number, and its price is what it says", () => {

@@ -4,11 +4,11 @@ import { admitNumber } from "#shared/rules/admit-number.ts";
 import { checkOrderable } from "#shared/rules/check-orderable.ts";
 import { evaluate } from "#shared/rules/evaluate.ts";
 import { explain } from "#shared/rules/explain.ts";
-import { mend } from "#shared/rules/mend.ts";
+import { mend, repair } from "#shared/rules/mend.ts";
 import { bruteMend, isOpen, validAssignments } from "./brute-force.ts";
 import { drawFrom, randomCatalogue, randomFrom, type RandomCatalogue } from "./random-catalogue.ts";
 
-const catalogues = 160;
+const catalogues = 300;
 const day = { load: { minutes: {} }, today: "2026-12-01" };
 const contextOf = ({ catalogue, priceList }: RandomCatalogue) => ({ catalogue, priceList, ...day });
 
@@ -138,6 +138,23 @@ describe(
       }
       expect(mends).toBeGreaterThan(300);
       expect(none).toBeGreaterThan(50);
+    });
+
+    test("a broken build is repaired by the cheapest mend of the whole, and a sound one is left alone", () => {
+      let repaired = 0;
+      for (const seed of seeds) {
+        const random = randomCatalogue(seed);
+        for (const build of someBuilds(random, seed)) {
+          const valid = validAssignments(random, build.numbers);
+          const best = bruteMend(random, valid, build, null);
+          const expected = best?.changes.length === 0 ? null : best;
+          expect(repair(contextOf(random), build), `seed ${seed}: ${JSON.stringify(build)}`).toEqual(
+            expected,
+          );
+          if (expected !== null) repaired += 1;
+        }
+      }
+      expect(repaired).toBeGreaterThan(200);
     });
 
     test("a number is taken exactly when some valid build still extends the answers", () => {
