@@ -104,6 +104,8 @@ it("names what is wrong with the engraving and the quantity before anything is s
   await user.type(screen.getByLabelText("Blocks"), "21");
   await user.click(putButton());
   const summary = await screen.findByRole("group", { name: "2 things to mend" });
-  expect(document.activeElement).toBe(summary);
+  await waitFor(() => {
+    expect(document.activeElement).toBe(summary);
+  });
   expect(shop.bodies(put)).toEqual([]);
 });

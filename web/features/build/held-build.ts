@@ -1,5 +1,12 @@
-import { useDeferredValue, useEffect, useMemo, useState } from "react";
-import { NavigationType, useLocation, useNavigate, useNavigation, useNavigationType } from "react-router-dom";
+import { useContext, useDeferredValue, useEffect, useMemo, useState } from "react";
+import {
+  NavigationType,
+  UNSAFE_DataRouterContext as DataRouterContext,
+  useLocation,
+  useNavigate,
+  useNavigation,
+  useNavigationType,
+} from "react-router-dom";
 import { sameSearch } from "./build-address.ts";
 import { readVisit, writeVisit } from "./visit-store.ts";
 
@@ -59,6 +66,7 @@ export function useHeldBuild(): HeldBuild {
   const location = useLocation();
   const arrival = useNavigationType();
   const navigate = useNavigate();
+  const router = useContext(DataRouterContext)?.router;
   const [held, setHeld] = useState<Held>(() => ({
     search: location.search,
     entry: location.key,
@@ -83,11 +91,14 @@ export function useHeldBuild(): HeldBuild {
   const { pathname, search: shown, key } = location;
   useEffect(() => {
     if (!idle || settled.entry !== key || sameSearch(settled.search, shown)) return;
+    // What was rendered may be behind: a step that is being left right now must not be called back.
+    const now = router?.state;
+    if (now !== undefined && (now.navigation.state !== "idle" || now.location.key !== key)) return;
     void navigate(
       { pathname, search: settled.search },
       { replace: true, preventScrollReset: true, state: mirror },
     );
-  }, [settled, idle, key, pathname, shown, navigate]);
+  }, [settled, idle, key, pathname, shown, navigate, router]);
 
   useEffect(() => {
     keepTrail(settled);

@@ -73,7 +73,11 @@ export function ReviewForm() {
   const engravingField = register("engraving");
   const requestField = register("specialRequest");
   return (
-    <form onSubmit={(event) => void send(event)} noValidate className="[&_input]:scroll-my-28">
+    <form
+      onSubmit={(event) => void send(event)}
+      noValidate
+      className="[&_:is(input,button,summary,a,textarea)]:scroll-my-32"
+    >
       <StepHeading
         title="Review"
         position={current.catalogue.steps.length}

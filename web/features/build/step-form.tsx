@@ -28,7 +28,7 @@ export function StepForm({ step }: { step: Step }) {
     void navigate({ pathname: stepPath(next?.id ?? reviewStep), search });
   };
   return (
-    <form onSubmit={goOn} noValidate className="[&_input]:scroll-my-28">
+    <form onSubmit={goOn} noValidate className="[&_:is(input,button,summary,a,textarea)]:scroll-my-32">
       <StepHeading title={step.name} position={position} intro={step.intro} />
       <BuildSheet
         here={step.id}
